@@ -1,0 +1,35 @@
+export default defineNuxtConfig({
+  modules: ['@nuxt/eslint', '@pinia/nuxt', '@nuxtjs/tailwindcss', '@nuxtjs/color-mode', '@vueuse/nuxt', '@nuxt/icon', '@sidebase/nuxt-auth'],
+  compatibilityDate: '2026-01-01',
+  devtools: { enabled: false },
+  telemetry: false,
+  css: ['~/assets/css/main.css'],
+  app: {
+    head: {
+      htmlAttrs: { lang: 'en' },
+      titleTemplate: '%s · Trotline',
+      meta: [{ name: 'viewport', content: 'width=device-width, initial-scale=1' }],
+    },
+  },
+  colorMode: { preference: 'day', fallback: 'day', dataValue: 'theme', classSuffix: '', storage: 'cookie', storageKey: 'trotline-theme' },
+  icon: { serverBundle: 'local', clientBundle: { scan: true }, provider: 'server', fallbackToApi: false },
+  auth: {
+    isEnabled: true,
+    disableServerSideAuth: false,
+    baseURL: '/api/auth',
+    provider: { type: 'authjs', trustHost: true, addDefaultCallbackUrl: false },
+    globalAppMiddleware: true,
+    sessionRefresh: { enablePeriodically: false, enableOnWindowFocus: true },
+  },
+  tailwindcss: { viewer: false, cssPath: false },
+  imports: { autoImport: true },
+  nitro: {
+    preset: 'node-server',
+    experimental: { tasks: true },
+    errorHandler: '~~/server/utils/error-handler.ts',
+    esbuild: { options: { target: 'node20' } },
+  },
+  typescript: { strict: true, typeCheck: false },
+  eslint: { config: { stylistic: false } },
+  vite: { worker: { format: 'es' } },
+})
