@@ -1,0 +1,61 @@
+import { and, asc, eq, gt, inArray, sql } from 'drizzle-orm'
+import { users } from '../accounts/schema'
+import type { Database, Transaction } from '../client'
+import { campaigns, memberships } from './schema'
+
+type Db = Database | Transaction
+export type CampaignRow = typeof campaigns.$inferSelect
+export type MembershipRow = typeof memberships.$inferSelect
+
+const ofUser = (userId: string, after: string | null) =>
+  and(eq(memberships.userId, userId), after ? gt(campaigns.id, after) : undefined)
+
+export const findCampaignsOfUser = (db: Db, userId: string, { after, limit }: { after: string | null, limit: number }) =>
+  db.select({ campaign: campaigns, role: memberships.role })
+    .from(campaigns)
+    .innerJoin(memberships, eq(memberships.campaignId, campaigns.id))
+    .where(ofUser(userId, after))
+    .orderBy(asc(campaigns.id))
+    .limit(limit)
+
+export const countCampaignsOfUser = (db: Db, userId: string) => db.$count(memberships, eq(memberships.userId, userId))
+
+export async function findCampaignById(db: Db, id: string): Promise<CampaignRow | undefined> {
+  const [row] = await db.select().from(campaigns).where(eq(campaigns.id, id))
+  return row
+}
+
+export async function findCampaignSlugs(db: Db, slugs: string[]): Promise<string[]> {
+  const rows = await db.select({ slug: campaigns.slug }).from(campaigns).where(inArray(campaigns.slug, slugs))
+  return rows.map(row => row.slug)
+}
+
+export async function insertCampaign(db: Db, row: typeof campaigns.$inferInsert): Promise<void> {
+  await db.insert(campaigns).values(row)
+}
+
+export async function insertMembership(db: Db, row: typeof memberships.$inferInsert): Promise<void> {
+  await db.insert(memberships).values(row)
+}
+
+type CampaignChange = Partial<Pick<CampaignRow, 'title' | 'kind' | 'description' | 'selfReview' | 'archivedAt'>>
+
+/** False when the row is no longer at that version. */
+export async function updateCampaign(db: Db, { id, version, change }: { id: string, version: number, change: CampaignChange }): Promise<boolean> {
+  const [answer] = await db.update(campaigns)
+    .set({ ...change, version: sql`${campaigns.version} + 1` })
+    .where(and(eq(campaigns.id, id), eq(campaigns.version, version)))
+  return answer.affectedRows === 1
+}
+
+const memberColumns = { userId: users.id, name: users.name, email: users.email, role: memberships.role, createdAt: memberships.createdAt }
+
+export const findMembers = (db: Db, campaignId: string, { after, limit }: { after: string | null, limit: number }) =>
+  db.select(memberColumns)
+    .from(memberships)
+    .innerJoin(users, eq(users.id, memberships.userId))
+    .where(and(eq(memberships.campaignId, campaignId), after ? gt(users.id, after) : undefined))
+    .orderBy(asc(users.id))
+    .limit(limit)
+
+export const countMembers = (db: Db, campaignId: string) => db.$count(memberships, eq(memberships.campaignId, campaignId))
