@@ -1,0 +1,12 @@
+import type { MailPreference, TokenScope } from '#shared/types/roles'
+
+/** Who asks. A session may do all that its account may; a token only what its scope allows. */
+export interface Actor {
+  userId: string
+  email: string
+  name: string
+  isAdministrator: boolean
+  mailPreference: MailPreference
+  via: 'session' | 'token'
+  scope: TokenScope
+}
