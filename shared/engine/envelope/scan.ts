@@ -1,0 +1,21 @@
+/** The grid point low ratio^k of smallest chi2, by plain evaluation; the first of equals. */
+export function scanByEvaluation(profile: { evaluate: (beta: number) => number }, low: number, ratio: number, count: number): number {
+  let best = 0
+  let smallest = Infinity
+  for (let k = 0; k < count; k++) {
+    const chi2 = profile.evaluate(low * ratio ** k)
+    if (chi2 < smallest) {
+      smallest = chi2
+      best = k
+    }
+  }
+  return best
+}
+
+/** Points low, low ratio, ... and high, ascending. */
+export function scanPoints(low: number, high: number, ratio: number): number[] {
+  const points: number[] = []
+  for (let x = low; x < high; x *= ratio) points.push(x)
+  points.push(high)
+  return points
+}
