@@ -1,3 +1,5 @@
+import { fileURLToPath } from 'node:url'
+
 export default defineNuxtConfig({
   modules: ['@nuxt/eslint', '@pinia/nuxt', '@nuxtjs/tailwindcss', '@nuxtjs/color-mode', '@vueuse/nuxt', '@nuxt/icon', '@sidebase/nuxt-auth'],
   compatibilityDate: '2026-01-01',
@@ -27,6 +29,9 @@ export default defineNuxtConfig({
     preset: 'node-server',
     experimental: { tasks: true },
     errorHandler: '~~/server/utils/error-handler.ts',
+    // Before the sign-in module's own plugin.
+    plugins: [fileURLToPath(new URL('./server/start/auth-origin.ts', import.meta.url))],
+    serverAssets: [{ baseName: 'migrations', dir: fileURLToPath(new URL('./drizzle', import.meta.url)) }],
     esbuild: { options: { target: 'node20' } },
   },
   typescript: { strict: true, typeCheck: false },

@@ -19,6 +19,8 @@ const environmentSchema = z.object({
   TROTLINE_ORIGIN: originSchema.default('http://127.0.0.1:4310'),
   TROTLINE_STORAGE_DIR: z.string().min(1).default('.data/storage'),
   TROTLINE_SECRETS_DIR: z.string().min(1).default('.data/secrets'),
+  /** Set to true behind a proxy that writes X-Forwarded-For itself. */
+  TROTLINE_TRUST_PROXY: z.stringbool().default(false),
   TROTLINE_INSTANCE: z.string().regex(/^[a-z0-9-]{1,32}$/, 'takes small letters, digits and hyphens').default('main'),
   TROTLINE_LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
   TROTLINE_WORKER_CONCURRENCY: count(2),
@@ -43,6 +45,7 @@ const toConfig = (environment: Environment) => ({
   origin: environment.TROTLINE_ORIGIN,
   storageDir: environment.TROTLINE_STORAGE_DIR,
   secretsDir: environment.TROTLINE_SECRETS_DIR,
+  trustProxy: environment.TROTLINE_TRUST_PROXY,
   instance: environment.TROTLINE_INSTANCE,
   logLevel: environment.TROTLINE_LOG_LEVEL,
   workerConcurrency: environment.TROTLINE_WORKER_CONCURRENCY,

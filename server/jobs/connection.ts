@@ -24,3 +24,17 @@ export function redisConnection(kind: 'producer' | 'worker'): Redis {
   })
   return redis
 }
+
+/** Waits a moment for a connection that is just being made; a producer's commands fail until then. */
+export async function settled(redis: Redis, patienceMs = 500): Promise<void> {
+  if (redis.status !== 'connecting' && redis.status !== 'connect') return
+  await new Promise<void>((resolve) => {
+    const timer = setTimeout(resolve, patienceMs)
+    for (const event of ['ready', 'error', 'close']) {
+      redis.once(event, () => {
+        clearTimeout(timer)
+        resolve()
+      })
+    }
+  })
+}

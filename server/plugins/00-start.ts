@@ -1,4 +1,5 @@
 import { mkdirSync } from 'node:fs'
+import { defineNitroPlugin } from 'nitropack/runtime'
 import { config, ConfigError } from '../config'
 import { closeDatabase, connectDatabase } from '../database/client'
 import { beginStart, onStop, runStopStage, stopEverything } from '../lifecycle'

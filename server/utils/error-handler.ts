@@ -1,4 +1,5 @@
 import { getRequestHeaders, getResponseHeader, send, setResponseHeader, setResponseStatus, type H3Error, type H3Event } from 'h3'
+import { useNitroApp } from 'nitropack/runtime'
 import { logger } from '../logger'
 import { toErrorAnswer, type ErrorAnswer } from './error-answer'
 

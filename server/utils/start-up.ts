@@ -1,4 +1,5 @@
 import { setTimeout as sleep } from 'node:timers/promises'
+import { useStorage } from 'nitropack/runtime'
 import { databasePool } from '../database/client'
 import { migrateDatabase, SchemaError, type Migration } from '../database/migrate'
 import { logger } from '../logger'

@@ -1,0 +1,13 @@
+import { config } from '../config'
+
+export interface CookieNames { session: string, csrf: string, callback: string, secure: boolean }
+
+/**
+ * Names of our cookies. On https they carry the __Host- prefix, so that no sibling domain can set them; on plain
+ * loopback that prefix is not allowed, and as cookies ignore ports each instance has names of its own.
+ */
+export function cookieNames(origin = config().origin, instance = config().instance): CookieNames {
+  const secure = origin.startsWith('https:')
+  const base = `${secure ? '__Host-' : ''}trotline-${instance}`
+  return { session: base, csrf: `${base}-csrf`, callback: `${base}-callback`, secure }
+}
