@@ -1,0 +1,3 @@
+import { startSharedStack } from './shared-stack'
+
+export default () => startSharedStack('integration', 'accounts')
