@@ -6,6 +6,9 @@ import { dirname, join, normalize } from 'node:path'
 const files = execFileSync('git', ['ls-files', '--cached', '--others', '--exclude-standard', 'app', 'server', 'shared'], { encoding: 'utf8' })
   .split('\n').filter(file => /\.(ts|vue|mjs)$/.test(file))
 
+/** Open to every server file. */
+const foundation = ['server/config', 'server/logger', 'server/lifecycle', 'server/secrets']
+
 /** First match decides. `local`: prefixes of project paths; `packages`: npm names; both exact lists of what may pass. */
 const rules = [
   { from: 'shared/engine/', local: ['shared/engine/'], packages: [] },
@@ -13,13 +16,14 @@ const rules = [
   { from: 'shared/formats/', local: ['shared/formats/', 'shared/types/', 'shared/engine/units/', 'shared/engine/types', 'shared/schemas/'], packages: ['csv-parse', 'zod', 'fflate'] },
   { from: 'shared/types/', local: ['shared/types/', 'shared/engine/types', 'shared/schemas/'], packages: ['zod'] },
   { from: 'shared/', local: ['shared/schemas/', 'shared/utils/', 'shared/types/', 'shared/engine/'], packages: ['zod'] },
-  { from: 'server/database/', local: ['server/database/', 'server/logger', 'shared/'], packages: ['drizzle-orm', 'mysql2', 'ulid', 'zod'] },
-  { from: 'server/jobs/handlers/', local: ['server/jobs/', 'server/services/', 'server/mail/', 'server/config', 'server/logger', 'server/database/ids', 'shared/'], packages: ['bullmq', 'ioredis'] },
-  { from: 'server/jobs/', local: ['server/jobs/', 'server/config', 'server/logger', 'shared/'], packages: ['bullmq', 'ioredis', 'zod'] },
-  { from: 'server/mail/', local: ['server/mail/', 'server/config', 'server/logger', 'shared/'], packages: ['nodemailer'] },
-  { from: 'server/services/', local: ['server/services/', 'server/database/', 'server/jobs/', 'server/mail/', 'server/config', 'server/logger', 'shared/'], not: ['h3', 'bullmq', 'ioredis', 'nodemailer', 'nitropack'] },
+  { from: 'server/database/', local: ['server/database/', ...foundation, 'shared/'], packages: ['drizzle-orm', 'mysql2', 'ulid', 'zod'] },
+  { from: 'server/jobs/handlers/', local: ['server/jobs/', 'server/services/', 'server/mail/', ...foundation, 'server/database/ids', 'shared/'], packages: ['bullmq', 'ioredis'] },
+  { from: 'server/jobs/', local: ['server/jobs/', ...foundation, 'shared/'], packages: ['bullmq', 'ioredis', 'zod'] },
+  { from: 'server/mail/', local: ['server/mail/', ...foundation, 'shared/'], packages: ['nodemailer'] },
+  { from: 'server/services/', local: ['server/services/', 'server/database/', 'server/jobs/', 'server/mail/', ...foundation, 'shared/'], not: ['h3', 'bullmq', 'ioredis', 'nodemailer', 'nitropack'] },
+  { from: 'server/utils/start-up', local: ['server/database/', ...foundation], not: ['bullmq'] },
   { from: 'server/plugins/', local: ['server/', 'shared/'], not: ['bullmq'] },
-  { from: 'server/', local: ['server/services/', 'server/utils/', 'server/config', 'server/logger', 'shared/'], not: ['drizzle-orm', 'bullmq', 'ioredis', 'mysql2', 'nodemailer'] },
+  { from: 'server/', local: ['server/services/', 'server/utils/', ...foundation, 'shared/'], not: ['drizzle-orm', 'bullmq', 'ioredis', 'mysql2', 'nodemailer'] },
   { from: 'app/workers/', local: ['app/', 'shared/'], not: ['drizzle-orm', 'bullmq', 'ioredis', 'mysql2'] },
   { from: 'app/', local: ['app/', 'shared/'], not: ['drizzle-orm', 'bullmq', 'ioredis', 'mysql2', 'nodemailer', 'h3'] },
 ]
