@@ -1,0 +1,22 @@
+import type { AccountView, ApiTokenView } from '#shared/types/account'
+import type { NewToken, ProfileChange, SetUp } from '#shared/schemas/account'
+
+export function useAccount() {
+  const api = useApi()
+  return useAsyncData('me', () => api<AccountView>('/api/me'))
+}
+
+export function useTokens() {
+  const api = useApi()
+  return useAsyncData('me:tokens', async () => (await api<{ items: ApiTokenView[] }>('/api/me/tokens')).items, { default: (): ApiTokenView[] => [] })
+}
+
+export function useAccountChanges() {
+  const api = useApi()
+  return {
+    change: (change: ProfileChange) => api<AccountView>('/api/me', { method: 'PATCH', body: { ...change } }),
+    createToken: (input: Partial<NewToken>) => api<ApiTokenView & { token: string }>('/api/me/tokens', { method: 'POST', body: { ...input } }),
+    revokeToken: (id: string) => api<null>(`/api/me/tokens/${id}`, { method: 'DELETE' }),
+    setUp: (input: SetUp) => api<unknown>('/api/set-up', { method: 'POST', body: { ...input } }),
+  }
+}
