@@ -7,7 +7,7 @@ const files = execFileSync('git', ['ls-files', '--cached', '--others', '--exclud
   .split('\n').filter(file => /\.(ts|vue|mjs)$/.test(file))
 
 /** Open to every server file. */
-const foundation = ['server/config', 'server/logger', 'server/lifecycle', 'server/secrets']
+const foundation = ['server/config', 'server/logger', 'server/lifecycle', 'server/secrets', 'server/database/ids']
 
 /** First match decides. `local`: prefixes of project paths; `packages`: npm names; both exact lists of what may pass. */
 const rules = [
