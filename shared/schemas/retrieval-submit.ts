@@ -36,3 +36,6 @@ export type ReviseRetrieval = z.output<typeof reviseRetrievalSchema>
 
 export const reviewRetrievalSchema = z.strictObject({ verdict: z.enum(['accept', 'return']), note })
 export type ReviewRetrieval = z.output<typeof reviewRetrievalSchema>
+
+/** Routes that address one thing by its id. */
+export const idParams = z.object({ id: ulidSchema })

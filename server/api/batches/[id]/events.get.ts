@@ -1,0 +1,6 @@
+import { idParams } from '#shared/schemas/retrieval-submit'
+import { followBatch } from '../../../services/retrievals/follow'
+import { sendEvents } from '../../../utils/event-stream'
+import { defineRoute } from '../../../utils/route'
+
+export default defineRoute({ access: 'read', params: idParams }, async ({ event, actor, params }) => sendEvents(event, await followBatch(actor, params.id)))

@@ -1,0 +1,5 @@
+import { idParams } from '#shared/schemas/retrieval-submit'
+import { batchCounts } from '../../../services/batches/index'
+import { defineRoute } from '../../../utils/route'
+
+export default defineRoute({ access: 'read', params: idParams }, ({ actor, params }) => batchCounts(actor, params.id))

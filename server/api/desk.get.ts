@@ -1,0 +1,4 @@
+import { deskOf } from '../services/desk/index'
+import { defineRoute } from '../utils/route'
+
+export default defineRoute({ access: 'read' }, ({ actor }) => deskOf(actor))

@@ -1,0 +1,5 @@
+import { idParams } from '#shared/schemas/retrieval-submit'
+import { retrievalDetail } from '../../../services/retrievals/detail'
+import { defineRoute } from '../../../utils/route'
+
+export default defineRoute({ access: 'read', params: idParams }, ({ actor, params }) => retrievalDetail(actor, params.id))

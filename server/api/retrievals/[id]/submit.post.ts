@@ -1,0 +1,5 @@
+import { idParams } from '#shared/schemas/retrieval-submit'
+import { submitDraft } from '../../../services/retrievals/submit-draft'
+import { defineRoute } from '../../../utils/route'
+
+export default defineRoute({ access: 'submit', params: idParams, status: 202 }, ({ actor, params }) => submitDraft(actor, params.id))

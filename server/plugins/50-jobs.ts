@@ -1,0 +1,18 @@
+import { config } from '../config'
+import { closeQueue, openQueue } from '../jobs/queue'
+import { startWorker } from '../jobs/worker'
+import { onStop, started } from '../lifecycle'
+import { closeMail } from '../mail/transport'
+import { stopEventStreams } from '../utils/event-stream'
+
+/** The web process hands work to the queue; the worker process does it. */
+export default defineNitroPlugin(() => {
+  openQueue()
+  onStop('queue', 'queue', closeQueue)
+  if (config().role === 'web') return onStop('streams', 'event streams', stopEventStreams)
+  onStop('mail', 'mail', closeMail)
+  started().then(() => {
+    const worker = startWorker()
+    onStop('workers', 'worker', () => worker.close())
+  }, () => { /* the start-up has said why and ends the process */ })
+})

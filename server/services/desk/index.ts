@@ -1,0 +1,32 @@
+import type { SQL } from 'drizzle-orm'
+import type { Desk } from '#shared/types/desk'
+import type { RetrievalRow } from '#shared/types/retrieval'
+import { may } from '#shared/utils/permissions'
+import { database } from '../../database/client'
+import { countRetrievals, readNewest } from '../../database/retrievals/list'
+import { countLastNight, endedSince, mineInPhases, reviewable } from '../../database/retrievals/desk'
+import type { Actor } from '../accounts/actor'
+import { rolesByCampaign } from '../campaigns/access'
+import { rowView } from '../retrievals/view'
+
+const dayMs = 86_400_000
+
+/** What a person finds on their own start page. */
+export async function deskOf(actor: Actor): Promise<Desk> {
+  const roles = await rolesByCampaign(actor)
+  const campaignIds = [...roles.keys()]
+  const reviewed = campaignIds.filter(id => may(roles.get(id), 'review'))
+  const [running, waitingForMe, cameBack, waitingForMyReview, lastNight] = await Promise.all([
+    few(mineInPhases(actor.userId, campaignIds, ['QUEUED', 'EXECUTING'])),
+    few(mineInPhases(actor.userId, campaignIds, ['PENDING', 'HELD'])),
+    few(endedSince(actor.userId, campaignIds, new Date(Date.now() - 7 * dayMs))),
+    few(reviewable(actor.userId, reviewed)),
+    countLastNight(database(), campaignIds, new Date(Date.now() - dayMs)),
+  ])
+  return { running, waitingForMe, cameBack, waitingForMyReview, lastNight }
+}
+
+async function few(where: SQL | undefined): Promise<{ items: RetrievalRow[], total: number }> {
+  const [rows, total] = await Promise.all([readNewest(database(), where, 10), countRetrievals(database(), where)])
+  return { items: rows.map(rowView), total }
+}

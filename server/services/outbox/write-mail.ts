@@ -1,0 +1,30 @@
+import { database } from '../../database/client'
+import { findBatch, readBatchRows } from '../../database/batches/repository'
+import type { OutboxRecord } from '../../database/outbox/repository'
+import { readListed } from '../../database/retrievals/list'
+import { findResult } from '../../database/retrievals/read'
+import { config } from '../../config'
+import { digestMail } from '../../mail/digest'
+import { resultMail } from '../../mail/result'
+import type { MailContent } from '../../mail/transport'
+
+/** The words of a mail, written when it is sent; null when what it speaks of is gone. */
+export async function writeMail({ kind, payload }: Pick<OutboxRecord, 'kind' | 'payload'>): Promise<MailContent | null> {
+  return kind === 'digest' ? writeDigest(String(payload.batchId)) : writeResult(String(payload.retrievalId), Number(payload.revision))
+}
+
+async function writeResult(id: string, revision: number): Promise<MailContent | null> {
+  const [row, stored] = await Promise.all([readListed(database(), id), findResult(database(), id, revision)])
+  if (!row || !stored) return null
+  return resultMail({
+    name: row.name, campaign: row.campaignTitle, observedAt: row.observedAt, revision, phase: stored.phase, reason: stored.reason,
+    result: stored.result, link: `${config().origin}/retrievals/${id}`, accountLink: `${config().origin}/account`,
+  })
+}
+
+async function writeDigest(batchId: string): Promise<MailContent | null> {
+  const [batch, rows] = await Promise.all([findBatch(database(), batchId), readBatchRows(database(), batchId)])
+  if (!batch || rows.length === 0) return null
+  const first = await readListed(database(), rows[0]!.id)
+  return digestMail({ campaign: first?.campaignTitle ?? '', note: batch.note, rows, link: `${config().origin}/batches/${batchId}`, accountLink: `${config().origin}/account`, origin: config().origin })
+}

@@ -1,0 +1,14 @@
+import * as z from 'zod'
+import type { SettingsPatch } from '#shared/schemas/retrieval-submit'
+import { settingsSchema, type RetrievalSettings } from '#shared/schemas/settings'
+import { DomainError } from '#shared/utils/domain-error'
+
+/** What is said wins over what it is laid upon; what neither says has its default. */
+export function mergeSettings(base: RetrievalSettings | undefined, patch: SettingsPatch | undefined): RetrievalSettings {
+  const said = Object.fromEntries(Object.entries(patch ?? {}).filter(([, value]) => value !== undefined))
+  const parsed = settingsSchema.safeParse({ ...base, ...said })
+  if (parsed.success) return parsed.data
+  throw new DomainError('validation_failed', 'The settings cannot be used.', fieldsOf(parsed.error))
+}
+
+const fieldsOf = (error: z.ZodError) => error.issues.map(issue => ({ path: ['settings', ...issue.path].join('.'), message: issue.message }))
