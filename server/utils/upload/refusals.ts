@@ -1,0 +1,12 @@
+import { DomainError } from '../../../shared/utils/domain-error'
+import type { UploadLimits } from './limits'
+import { inWords } from './limits'
+
+export const requestTooLarge = (limits: UploadLimits) => new DomainError('payload_too_large', `One request takes at most ${inWords(limits.requestBytes)}. Send the files in several requests.`)
+export const fileTooLarge = (name: string, limits: UploadLimits) => new DomainError('payload_too_large', `A file takes at most ${inWords(limits.fileBytes)}; "${name}" is larger. Cut the spectrum to the range of the lines.`, [{ path: 'files', message: `"${name}" is larger than ${inWords(limits.fileBytes)}.` }])
+export const tooManyFiles = (limits: UploadLimits) => new DomainError('payload_too_large', `One request takes at most ${limits.files} files. Send them in several requests.`)
+export const tooManyFields = (limits: UploadLimits) => new DomainError('payload_too_large', `One request takes at most ${limits.fields} fields beside its files.`)
+export const fieldTooLarge = (name: string, limits: UploadLimits) => new DomainError('payload_too_large', `The field "${name}" is larger than ${inWords(limits.fieldBytes)}.`)
+export const notMultipart = () => new DomainError('unsupported_media_type', 'Send the files as multipart/form-data.')
+export const malformed = (what: string) => new DomainError('malformed_upload', what)
+export const cutOff = () => malformed('The upload was cut off before its end. Send it again.')
