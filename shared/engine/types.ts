@@ -221,8 +221,12 @@ export interface SpectrumRetrievalInput {
   continuumOrder: number
   /** Excluded ranges, vacuum nm. */
   masks: [number, number][]
+  /** What an intensity of the observable is integrated over, where it is not wavelength (default): areas are converted line by line. */
+  integrateOver?: 'wavelength' | 'wavenumber' | 'frequency' | 'velocity'
   noise: NoiseKind
   temperatureRange?: [number, number]
+  /** `own` (default): each band its own scale; `common`: one scale for all. */
+  bandScales?: 'own' | 'common'
   strengthSet: string | null
   alternatives?: AlternativeStrengths[]
   cautions?: string[]

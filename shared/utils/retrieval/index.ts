@@ -1,0 +1,3 @@
+export { prepareFromTable } from './from-table'
+export { prepareFromSpectrum } from './from-spectrum'
+export type { InputProblem, Prepared } from './problem'
