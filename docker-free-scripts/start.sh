@@ -14,6 +14,7 @@ for option in "$@"; do
 done
 
 begun=$(date +%s)
+export TROTLINE_DATA_DIR=$DATA
 mkdir -p "$RUN" "$LOGS"
 exec 8> "$RUN/.start-lock"
 flock -n 8 || fail 'Another start is under way in this data folder.'
@@ -28,7 +29,7 @@ start_application 8>&-
 if [ "$demo" = yes ]; then
   if [ ! -f "$DATA/demo-seeded" ]; then
     say 'Seeding the invented demo ...'
-    node "$here/seed.mjs" --demo --env "$RUN/env" > "$LOGS/seed.log" 2>&1 || fail "The demo could not be seeded; see $LOGS/seed.log"
+    node "$here/seed.mjs" --demo > "$LOGS/seed.log" 2>&1 || fail "The demo could not be seeded; see $LOGS/seed.log"
     touch "$DATA/demo-seeded"
   fi
   accounts="Demo accounts (password for all: trotline-demo):
@@ -38,7 +39,7 @@ if [ "$demo" = yes ]; then
   reader@trotline.example    Reader
   admin@trotline.example     Administrator of the service"
 else
-  accounts="$(node "$here/set-up-link.mjs" --env "$RUN/env" | tail -n 1)"
+  accounts="$(node "$here/set-up-link.mjs" | tail -n 1)"
   accounts="Set up the first administrator here (once, within 24 hours):
   $accounts"
 fi

@@ -131,7 +131,7 @@ export async function emptyRedis(stack: Stack): Promise<void> {
 
 /** The five demo accounts; with `demo` also the invented campaigns. */
 export async function seed(stack: Stack, what: 'accounts' | 'demo'): Promise<void> {
-  await run('node', ['docker-free-scripts/seed.mjs', what === 'demo' ? '--demo' : '--accounts-only', '--env', join(stack.folder, 'run/env')], { cwd: root, env: { ...process.env, ...stack.environment } })
+  await run('node', ['docker-free-scripts/seed.mjs', what === 'demo' ? '--demo' : '--accounts-only'], { cwd: root, env: { ...process.env, ...stack.environment } })
 }
 
 export async function destroyStack(stack: Stack): Promise<void> {
