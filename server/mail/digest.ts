@@ -1,6 +1,6 @@
 import { bitsToFlags, flagWords } from '#shared/engine/flags'
 import type { Phase } from '#shared/types/phases'
-import { printedTemperature } from '#shared/utils/printed-temperature'
+import { printTemperature } from '#shared/engine/format-value'
 import { button, escapeHtml, list, look, page, paragraph } from './html'
 import type { MailContent } from './transport'
 
@@ -55,7 +55,7 @@ export function digestMail({ campaign, note, rows, link, accountLink, origin }: 
 
 const section = (title: string, items: string[]): string[] => items.length > 0 ? ['', title, ...items.map(item => `- ${item}`)] : []
 
-const printed = ({ temperature, uNoise }: DigestRow): string => temperature === null ? 'no temperature' : printedTemperature(temperature, uNoise ?? 0).text
+const printed = ({ temperature, uNoise }: DigestRow): string => temperature === null ? 'no temperature' : printTemperature({ value: temperature, uNoise }).text
 
 const phaseWords: Partial<Record<Phase, string>> = { COMPLETED: 'done', ERROR: 'failed', ABORTED: 'aborted', HELD: 'waiting for you to complete them', PENDING: 'drafts' }
 

@@ -1,6 +1,6 @@
 import { flagWords } from '#shared/engine/flags'
 import type { Interval, RetrievalResult, TemperatureValue } from '#shared/engine/types'
-import { printedTemperature } from '#shared/utils/printed-temperature'
+import { printTemperature } from '#shared/engine/format-value'
 import { envelopePicture, pictureSize } from './envelope-picture'
 import { button, escapeHtml, list, look, page, paragraph } from './html'
 import type { MailContent } from './transport'
@@ -23,7 +23,7 @@ const cid = 'lines@trotline'
 export function resultMail(facts: ResultMailFacts): MailContent {
   const { result, link, accountLink } = facts
   const temperature = result?.temperature ?? null
-  const headline = temperature ? `T = ${printedTemperature(temperature.value, temperature.uNoise).text}` : 'No temperature'
+  const headline = temperature ? `T = ${printTemperature(temperature).text}` : 'No temperature'
   const subject = temperature ? `${headline.replace('T = ', '')}: ${facts.name}` : `No temperature: ${facts.name}`
   const details = [...(temperature ? [intervalWords(temperature)] : [facts.reason ?? 'The fit gave no temperature.']), ...(result ? setWords(result) : [])]
   const flags = result?.flags.map(flag => flagWords[flag]) ?? []
@@ -58,7 +58,7 @@ function aboutWords({ name, campaign, observedAt, revision }: ResultMailFacts): 
 const setWords = ({ strengthSet }: RetrievalResult): string[] => [strengthSet ? `Strength set ${strengthSet}.` : 'Strengths as given with the lines.']
 
 function intervalWords({ value, uNoise, interval68 }: TemperatureValue): string {
-  return `68 % interval ${boundsWords(interval68, bound => printedTemperature(bound, uNoise, value).value)} K.`
+  return `68 % interval ${boundsWords(interval68, bound => printTemperature({ value: bound, uNoise }).value)} K.`
 }
 
 function boundsWords([low, high]: Interval, print: (bound: number) => string): string {

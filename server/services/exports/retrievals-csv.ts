@@ -1,7 +1,7 @@
 import { stringify } from 'csv-stringify/sync'
 import { bitsToFlags } from '#shared/engine/flags'
 import type { RetrievalExportQuery } from '#shared/schemas/retrieval-list'
-import { printedTemperature } from '#shared/utils/printed-temperature'
+import { printTemperature } from '#shared/engine/format-value'
 import { database } from '../../database/client'
 import { readRetrievalPage, type ListedRetrieval } from '../../database/retrievals/list'
 import type { Actor } from '../accounts/actor'
@@ -38,7 +38,7 @@ const columns: [name: string, value: (row: ListedRetrieval) => Cell][] = [
   ['finished_at', row => row.finishedAt?.toISOString() ?? null],
 ]
 
-const printed = ({ temperature, uNoise }: ListedRetrieval) => temperature === null ? null : printedTemperature(temperature, uNoise ?? 0)
+const printed = ({ temperature, uNoise }: ListedRetrieval) => temperature === null ? null : printTemperature({ value: temperature, uNoise })
 
 /** Rows as lines of CSV (RFC 4180). Text that a spreadsheet would take for a formula is disarmed. */
 export const csvLines = (rows: ListedRetrieval[]): string =>

@@ -1,7 +1,7 @@
 import type { ReviseRetrieval } from '#shared/schemas/retrieval-submit'
 import type { RetrievalSettings } from '#shared/schemas/settings'
 import { DomainError } from '#shared/utils/domain-error'
-import { prepareFromTable } from '#shared/utils/retrieval/prepare-table'
+import { prepareFromTable } from '#shared/utils/retrieval/from-table'
 import { database } from '../../database/client'
 import { writeLogbook } from '../../database/logbook/repository'
 import { startRevision } from '../../database/retrievals/change'
