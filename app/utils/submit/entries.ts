@@ -1,3 +1,5 @@
+import { missingFields } from '#shared/formats/merge-about'
+import { impliesVacuum } from '#shared/formats/units'
 import type { MissingField, SpectrumAbout } from '#shared/types/spectrum'
 
 /** What the browser found in one file: small enough to keep for a thousand files. */
@@ -27,6 +29,8 @@ export interface FileEntry {
   state: EntryState
   read: ReadSummary | null
   answers: Partial<SpectrumAbout>
+  /** What the chosen instrument says of all its spectra. */
+  common: Partial<SpectrumAbout>
   error: string | null
   spectrumId: string | null
   /** What the service said of the stored file. */
@@ -34,25 +38,27 @@ export interface FileEntry {
 }
 
 export const newEntry = (id: number, file: File): FileEntry =>
-  ({ id, file, name: file.name, size: file.size, state: 'waiting', read: null, answers: {}, error: null, spectrumId: null, remarks: [] })
+  ({ id, file, name: file.name, size: file.size, state: 'waiting', read: null, answers: {}, common: {}, error: null, spectrumId: null, remarks: [] })
 
-/** What is known of a file: what it states, then what a person says. */
-export function knownAbout(entry: Pick<FileEntry, 'read' | 'answers'>): Partial<SpectrumAbout> {
-  return { ...entry.read?.stated, ...entry.answers }
+/** What is known of a file: what its instrument says, over it what the file states, over it what a person answers. */
+export function knownAbout(entry: Pick<FileEntry, 'read' | 'answers' | 'common'>): Partial<SpectrumAbout> {
+  return { ...entry.common, ...spoken(entry.read?.stated), ...entry.answers }
 }
 
-const inWavelength = new Set(['nm', 'angstrom', 'um'])
+const spoken = (stated: Partial<SpectrumAbout> = {}): Partial<SpectrumAbout> =>
+  Object.fromEntries(Object.entries(stated).filter(([, value]) => value !== null && value !== undefined))
 
-/** What still has to be asked, in the order of asking. Frequency and wavenumber need no medium. */
-export function missingOf(entry: Pick<FileEntry, 'read' | 'answers'>): MissingField[] {
+const nothingKnown: SpectrumAbout = {
+  axisUnit: null, medium: null, airFormula: 'ciddor1996', valueKind: null, valueUnit: null, columns: null,
+  observedAt: null, exposureSeconds: null, station: null, instrument: null, fullScale: null,
+}
+
+/** What still has to be asked, in the order of asking, by the same rule as the service. */
+export function missingOf(entry: Pick<FileEntry, 'read' | 'answers' | 'common'>): MissingField[] {
   if (!entry.read) return []
-  const about = knownAbout(entry)
-  const missing: MissingField[] = []
-  if (entry.read.format === 'text' && !about.columns) missing.push('columns')
-  if (!about.axisUnit) missing.push('axisUnit')
-  if (!about.medium && (!about.axisUnit || inWavelength.has(about.axisUnit))) missing.push('medium')
-  if (!about.valueKind) missing.push('valueKind')
-  return missing
+  const about = { ...nothingKnown, ...knownAbout(entry) }
+  if (about.medium === null && impliesVacuum(about.axisUnit)) about.medium = 'vacuum'
+  return missingFields(about, entry.read.format !== 'text' || about.columns !== null)
 }
 
 export const isComplete = (entry: FileEntry): boolean => entry.read !== null && entry.state !== 'unreadable' && missingOf(entry).length === 0
@@ -72,3 +78,10 @@ export function withAnswer(entries: FileEntry[], id: number, answer: Partial<Spe
 /** How many other files lack the field too. */
 export const othersLacking = (entries: FileEntry[], id: number, field: MissingField): number =>
   entries.filter(entry => entry.id !== id && entry.state !== 'unreadable' && missingOf(entry).includes(field)).length
+
+/** The questions to show: what neither the file nor its instrument says, answered or not, so that an answer can be changed. */
+export function questionsOf(entry: FileEntry): MissingField[] {
+  // The unit that was answered decides whether there is a medium to ask.
+  const asksMedium = missingOf({ ...entry, answers: { ...entry.answers, medium: null } }).includes('medium')
+  return missingOf({ ...entry, answers: {} }).filter(field => field !== 'medium' || asksMedium)
+}

@@ -1,0 +1,21 @@
+import type { SubmitRetrievals } from '#shared/schemas/retrieval-submit'
+import type { SpectrumAbout } from '#shared/types/spectrum'
+import type { StoredItem } from '~/composables/useSending'
+
+export interface Submitted { batchId: string, ids: string[] }
+
+/** What the Submit page asks of the service. */
+export function useSubmissionCalls() {
+  const api = useApi()
+  return {
+    upload(campaign: string, files: File[], about: Partial<SpectrumAbout>) {
+      const form = new FormData()
+      form.append('about', JSON.stringify(about))
+      for (const file of files) form.append('files', file, file.name)
+      return api<{ items: StoredItem[] }>(`/api/campaigns/${campaign}/spectra`, { method: 'POST', body: form })
+    },
+    queue(campaign: string, body: Partial<SubmitRetrievals>, key: string) {
+      return api<Submitted>(`/api/campaigns/${campaign}/retrievals`, { method: 'POST', body, headers: { 'idempotency-key': key } })
+    },
+  }
+}
