@@ -1,5 +1,6 @@
 import { createShapes, evaluateShapes } from '../line-model/shapes'
 import type { Shapes } from '../line-model/shapes'
+import { logStart } from './log-start'
 import type { ChiSquareProfile, EnvelopeProblem } from './problem'
 import { scanByEvaluation } from './scan'
 
@@ -10,6 +11,7 @@ export class DiagonalProfile implements ChiSquareProfile {
   curvature = 0
   information = 0
   rawInformation = 0
+  scanChi2 = 0
   readonly scales: Float64Array
   readonly slopes: Float64Array
   private readonly shapes: Shapes
@@ -87,14 +89,15 @@ export class DiagonalProfile implements ChiSquareProfile {
     this.rawInformation = raw
   }
 
-  scaleCovariance(): Float64Array {
-    const bands = this.problem.bandCount
-    const covariance = new Float64Array(bands * bands)
-    for (let b = 0; b < bands; b++) covariance[b * bands + b] = this.scales[b] > 0 ? 1 / this.ff[b] : 0
-    return covariance
+  scaleCovariance(a: number, b: number): number {
+    return a === b && this.scales[a] > 0 ? 1 / this.ff[a] : 0
   }
 
-  scan(low: number, ratio: number, count: number): number {
-    return scanByEvaluation(this, low, ratio, count)
+  scan(low: number, count: number): number {
+    return scanByEvaluation(this, low, count)
+  }
+
+  start(beta0: number): number {
+    return logStart(this.problem, beta0)
   }
 }

@@ -2,6 +2,7 @@ import { shapeExponent, shapeExponentRate } from '../line-model/shapes'
 import { DiagonalProfile } from './diagonal-profile'
 import { minimiseProfile } from './minimise'
 import type { ChiSquareProfile, EnvelopeProblem } from './problem'
+import { SingleProfile } from './single-profile'
 import { WhitenedProfile } from './whitened-profile'
 
 /** Result of the envelope fit; `reason` says how it ended. */
@@ -14,14 +15,15 @@ export interface EnvelopeFit {
   beta: number
   chi2: number
   /** Scale per band for w and energies above the model's reference energy. */
-  scales: Float64Array
+  scales: number[]
   /** Fisher covariance of (beta, scales), row-major; rows of scales at zero are zero. */
-  covariance: Float64Array
+  covariance: number[]
 }
 
 /** A profile of the right kind for the problem. */
 export function createProfile(problem: EnvelopeProblem): ChiSquareProfile {
-  return problem.factor ? new WhitenedProfile(problem) : new DiagonalProfile(problem)
+  if (problem.factor) return new WhitenedProfile(problem)
+  return SingleProfile.suits(problem) ? new SingleProfile(problem) : new DiagonalProfile(problem)
 }
 
 /** Estimator 1: temperature and scales of smallest chi2, with their covariance. Never throws. */
@@ -42,34 +44,35 @@ export function fitProfile(profile: ChiSquareProfile): EnvelopeFit {
 const informationFloor = 1e-14
 
 function endReason(profile: ChiSquareProfile, edge: string, converged: boolean): EnvelopeFit['reason'] {
-  if (profile.scales.every(scale => scale === 0)) return 'no-positive-scale'
+  if (allZero(profile.scales)) return 'no-positive-scale'
   if (!(profile.information > informationFloor * profile.rawInformation)) return 'no-information'
   if (edge === 'low-beta') return 'falls-to-hot-end'
   if (edge === 'high-beta') return 'falls-to-cold-end'
   return converged ? 'converged' : 'iteration-limit'
 }
 
+function allZero(values: Float64Array): boolean {
+  for (let i = 0; i < values.length; i++) if (values[i] !== 0) return false
+  return true
+}
+
 /** Block inverse of the Fisher matrix: var(beta) = 1/information, and each scale follows beta along its slope. */
 function scalesAndCovariance(profile: ChiSquareProfile, beta: number): Pick<EnvelopeFit, 'scales' | 'covariance'> {
   const { model, bandCount } = profile.problem
-  const size = bandCount + 1
-  const covariance = new Float64Array(size * size)
-  const scales = new Float64Array(bandCount)
-  const slopes = new Float64Array(bandCount)
   const unit = Math.exp(shapeExponent(model, beta)) / model.strengthUnit
   const rate = shapeExponentRate(model, beta)
-  for (let b = 0; b < bandCount; b++) {
-    scales[b] = profile.scales[b] * unit
-    slopes[b] = (profile.slopes[b] + profile.scales[b] * rate) * unit
-  }
-  const fixed = profile.scaleCovariance()
   const variance = 1 / profile.information
-  covariance[0] = variance
-  for (let a = 0; a < bandCount; a++) {
-    covariance[a + 1] = slopes[a] * variance
-    covariance[(a + 1) * size] = covariance[a + 1]
-    for (let b = 0; b < bandCount; b++) {
-      covariance[(a + 1) * size + b + 1] = fixed[a * bandCount + b] * unit * unit + slopes[a] * slopes[b] * variance
+  const scales: number[] = []
+  const slopes: number[] = [1]
+  for (let b = 0; b < bandCount; b++) {
+    scales.push(profile.scales[b] * unit)
+    slopes.push((profile.slopes[b] + profile.scales[b] * rate) * unit)
+  }
+  const covariance: number[] = []
+  for (let a = 0; a <= bandCount; a++) {
+    for (let b = 0; b <= bandCount; b++) {
+      const fixed = a > 0 && b > 0 ? profile.scaleCovariance(a - 1, b - 1) * unit * unit : 0
+      covariance.push(fixed + slopes[a] * slopes[b] * variance)
     }
   }
   return { scales, covariance }

@@ -5,7 +5,7 @@ export interface NewtonEnd { beta: number, converged: boolean, iterations: numbe
 
 const maxIterations = 100
 /** Newton steps shorter than this are taken and end the search: convergence is quadratic, so what is left is of the order of their square. */
-const relativeStep = 1e-9
+const relativeStep = 1e-7
 
 /**
  * Root of d chi2 / d beta by Newton's method inside a bracket that holds a minimum.
@@ -32,8 +32,8 @@ export function newtonToMinimum(profile: ChiSquareProfile, beta: number, low: nu
 function nextPoint(profile: ChiSquareProfile, beta: number, low: number, high: number): number {
   const { gradient, curvature, information } = profile
   const newton = curvature > 0 ? beta - gradient / curvature : Number.NaN
-  if (newton > low && newton < high) return newton
+  if (newton >= low && newton <= high) return newton
   const gaussNewton = beta - gradient / (2 * information)
-  if (curvature <= 0 && gaussNewton > low && gaussNewton < high) return gaussNewton
+  if (curvature <= 0 && gaussNewton >= low && gaussNewton <= high) return gaussNewton
   return 0.5 * (low + high)
 }

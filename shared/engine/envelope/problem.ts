@@ -35,8 +35,12 @@ export interface ChiSquareProfile {
   /** d(scale)/d(beta) along the valley floor, per band, in the Gauss-Newton sense. */
   slopes: Float64Array
   evaluate: (beta: number) => number
-  /** Covariance of the scales at fixed beta at the last point, row-major bandCount x bandCount; zero for scales at their bound. */
-  scaleCovariance: () => Float64Array
-  /** Smallest chi2 on the grid low ratio^k, k < count; returns its k. */
-  scan: (low: number, ratio: number, count: number) => number
+  /** Covariance of two scales at fixed beta at the last point; zero for a scale at its bound. */
+  scaleCovariance: (a: number, b: number) => number
+  /** Smallest chi2 on the grid low 2^k, k < count; returns its k. */
+  scan: (low: number, count: number) => number
+  /** chi2 at the point the last scan returned, to rounding of the sum of squares. */
+  scanChi2: number
+  /** Straight-line start of beta seen from `beta0` (see `logStart`); NaN when there is none. */
+  start: (beta0: number) => number
 }

@@ -1,14 +1,15 @@
-/** The grid point low ratio^k of smallest chi2, by plain evaluation; the first of equals. */
-export function scanByEvaluation(profile: { evaluate: (beta: number) => number }, low: number, ratio: number, count: number): number {
+/** The grid point low 2^k of smallest chi2, by plain evaluation; the first of equals. */
+export function scanByEvaluation(profile: { evaluate: (beta: number) => number, scanChi2: number }, low: number, count: number): number {
   let best = 0
   let smallest = Infinity
   for (let k = 0; k < count; k++) {
-    const chi2 = profile.evaluate(low * ratio ** k)
+    const chi2 = profile.evaluate(low * 2 ** k)
     if (chi2 < smallest) {
       smallest = chi2
       best = k
     }
   }
+  profile.scanChi2 = smallest
   return best
 }
 

@@ -1,9 +1,10 @@
 import { cholesky } from '../linalg/cholesky'
-import { choleskySolve, symmetricInverseFromCholesky } from '../linalg/cholesky-solve'
+import { choleskySolve } from '../linalg/cholesky-solve'
 import { solveLower, solveLowerTransposed } from '../linalg/triangular'
 import { createShapes, evaluateShapes } from '../line-model/shapes'
 import type { Shapes } from '../line-model/shapes'
 import { nonNegativeScales } from './non-negative-scales'
+import { logStart } from './log-start'
 import type { ChiSquareProfile, EnvelopeProblem } from './problem'
 import { scanByEvaluation } from './scan'
 
@@ -14,6 +15,7 @@ export class WhitenedProfile implements ChiSquareProfile {
   curvature = 0
   information = 0
   rawInformation = 0
+  scanChi2 = 0
   readonly scales: Float64Array
   readonly slopes: Float64Array
   private readonly factor: Float64Array
@@ -100,19 +102,21 @@ export class WhitenedProfile implements ChiSquareProfile {
     this.information = dot(centred, centred)
   }
 
-  scaleCovariance(): Float64Array {
-    const bands = this.problem.bandCount
-    const p = this.active.length
-    const inverse = symmetricInverseFromCholesky(this.normalFactor, p)
-    const covariance = new Float64Array(bands * bands)
-    this.active.forEach((a, j) => this.active.forEach((b, k) => {
-      covariance[a * bands + b] = inverse[j * p + k]
-    }))
-    return covariance
+  scaleCovariance(a: number, b: number): number {
+    const j = this.active.indexOf(a)
+    const k = this.active.indexOf(b)
+    if (j < 0 || k < 0) return 0
+    const unit = new Float64Array(this.active.length)
+    unit[k] = 1
+    return choleskySolve(this.normalFactor, this.active.length, unit)[j]
   }
 
-  scan(low: number, ratio: number, count: number): number {
-    return scanByEvaluation(this, low, ratio, count)
+  scan(low: number, count: number): number {
+    return scanByEvaluation(this, low, count)
+  }
+
+  start(beta0: number): number {
+    return logStart(this.problem, beta0)
   }
 }
 
