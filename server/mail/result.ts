@@ -1,4 +1,5 @@
 import { flagWords } from '#shared/engine/flags'
+import { decimalsFor, printTemperature } from '#shared/engine/format-value'
 import type { Interval, RetrievalResult, TemperatureValue } from '#shared/engine/types'
 import { printTemperature } from '#shared/engine/format-value'
 import { envelopePicture, pictureSize } from './envelope-picture'
@@ -57,7 +58,7 @@ function aboutWords({ name, campaign, observedAt, revision }: ResultMailFacts): 
 
 const setWords = ({ strengthSet }: RetrievalResult): string[] => [strengthSet ? `Strength set ${strengthSet}.` : 'Strengths as given with the lines.']
 
-function intervalWords({ value, uNoise, interval68 }: TemperatureValue): string {
+function intervalWords({ uNoise, interval68 }: TemperatureValue): string {
   return `68 % interval ${boundsWords(interval68, bound => printTemperature({ value: bound, uNoise }).value)} K.`
 }
 

@@ -1,5 +1,6 @@
 import { stringify } from 'csv-stringify/sync'
 import { bitsToFlags } from '#shared/engine/flags'
+import { printTemperature } from '#shared/engine/format-value'
 import type { RetrievalExportQuery } from '#shared/schemas/retrieval-list'
 import { printTemperature } from '#shared/engine/format-value'
 import { database } from '../../database/client'
