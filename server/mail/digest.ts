@@ -1,7 +1,6 @@
 import { bitsToFlags, flagWords } from '#shared/engine/flags'
 import { printTemperature } from '#shared/engine/format-value'
 import type { Phase } from '#shared/types/phases'
-import { printTemperature } from '#shared/engine/format-value'
 import { button, escapeHtml, list, look, page, paragraph } from './html'
 import type { MailContent } from './transport'
 

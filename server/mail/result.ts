@@ -1,7 +1,6 @@
 import { flagWords } from '#shared/engine/flags'
-import { decimalsFor, printTemperature } from '#shared/engine/format-value'
-import type { Interval, RetrievalResult, TemperatureValue } from '#shared/engine/types'
 import { printTemperature } from '#shared/engine/format-value'
+import type { Interval, RetrievalResult, TemperatureValue } from '#shared/engine/types'
 import { envelopePicture, pictureSize } from './envelope-picture'
 import { button, escapeHtml, list, look, page, paragraph } from './html'
 import type { MailContent } from './transport'

@@ -1,4 +1,4 @@
-import * as z from 'zod'
+import type * as z from 'zod'
 import type { SettingsPatch } from '#shared/schemas/retrieval-submit'
 import { settingsSchema, type RetrievalSettings } from '#shared/schemas/settings'
 import { DomainError } from '#shared/utils/domain-error'
