@@ -1,12 +1,11 @@
 import { and, asc, desc, eq, gt, max } from 'drizzle-orm'
 import { users } from '../accounts/schema'
-import type { Database, Transaction } from '../client'
+import type { Queryable } from '../client'
 import { recipes } from './schema'
 
-type Db = Database | Transaction
 export type RecipeRow = typeof recipes.$inferSelect
 
-export const findRecipes = (db: Db, campaignId: string, { after, limit }: { after: string | null, limit: number }) =>
+export const findRecipes = (db: Queryable, campaignId: string, { after, limit }: { after: string | null, limit: number }) =>
   db.select({ recipe: recipes, createdBy: users.name })
     .from(recipes)
     .innerJoin(users, eq(users.id, recipes.createdBy))
@@ -14,16 +13,16 @@ export const findRecipes = (db: Db, campaignId: string, { after, limit }: { afte
     .orderBy(asc(recipes.id))
     .limit(limit)
 
-export const countRecipes = (db: Db, campaignId: string) => db.$count(recipes, eq(recipes.campaignId, campaignId))
+export const countRecipes = (db: Queryable, campaignId: string) => db.$count(recipes, eq(recipes.campaignId, campaignId))
 
-export async function newestRecipeVersions(db: Db, campaignId: string): Promise<Map<string, number>> {
+export async function newestRecipeVersions(db: Queryable, campaignId: string): Promise<Map<string, number>> {
   const rows = await db.select({ slug: recipes.slug, version: max(recipes.version) })
     .from(recipes).where(eq(recipes.campaignId, campaignId)).groupBy(recipes.slug)
   return new Map(rows.map(row => [row.slug, row.version ?? 0]))
 }
 
 /** `version` null: the newest. */
-export async function findRecipe(db: Db, campaignId: string, { slug, version }: { slug: string, version: number | null }): Promise<RecipeRow | undefined> {
+export async function findRecipe(db: Queryable, campaignId: string, { slug, version }: { slug: string, version: number | null }): Promise<RecipeRow | undefined> {
   const [row] = await db.select().from(recipes)
     .where(and(eq(recipes.campaignId, campaignId), eq(recipes.slug, slug), version === null ? undefined : eq(recipes.version, version)))
     .orderBy(desc(recipes.version))
@@ -31,6 +30,6 @@ export async function findRecipe(db: Db, campaignId: string, { slug, version }: 
   return row
 }
 
-export async function insertRecipe(db: Db, row: typeof recipes.$inferInsert): Promise<void> {
+export async function insertRecipe(db: Queryable, row: typeof recipes.$inferInsert): Promise<void> {
   await db.insert(recipes).values(row)
 }

@@ -1,16 +1,15 @@
 import { and, asc, eq, gt, inArray, sql } from 'drizzle-orm'
 import { users } from '../accounts/schema'
-import type { Database, Transaction } from '../client'
+import type { Queryable } from '../client'
 import { campaigns, memberships } from './schema'
 
-type Db = Database | Transaction
 export type CampaignRow = typeof campaigns.$inferSelect
 export type MembershipRow = typeof memberships.$inferSelect
 
 const ofUser = (userId: string, after: string | null) =>
   and(eq(memberships.userId, userId), after ? gt(campaigns.id, after) : undefined)
 
-export const findCampaignsOfUser = (db: Db, userId: string, { after, limit }: { after: string | null, limit: number }) =>
+export const findCampaignsOfUser = (db: Queryable, userId: string, { after, limit }: { after: string | null, limit: number }) =>
   db.select({ campaign: campaigns, role: memberships.role })
     .from(campaigns)
     .innerJoin(memberships, eq(memberships.campaignId, campaigns.id))
@@ -18,30 +17,30 @@ export const findCampaignsOfUser = (db: Db, userId: string, { after, limit }: { 
     .orderBy(asc(campaigns.id))
     .limit(limit)
 
-export const countCampaignsOfUser = (db: Db, userId: string) => db.$count(memberships, eq(memberships.userId, userId))
+export const countCampaignsOfUser = (db: Queryable, userId: string) => db.$count(memberships, eq(memberships.userId, userId))
 
-export async function findCampaignById(db: Db, id: string): Promise<CampaignRow | undefined> {
+export async function findCampaignById(db: Queryable, id: string): Promise<CampaignRow | undefined> {
   const [row] = await db.select().from(campaigns).where(eq(campaigns.id, id))
   return row
 }
 
-export async function findCampaignSlugs(db: Db, slugs: string[]): Promise<string[]> {
+export async function findCampaignSlugs(db: Queryable, slugs: string[]): Promise<string[]> {
   const rows = await db.select({ slug: campaigns.slug }).from(campaigns).where(inArray(campaigns.slug, slugs))
   return rows.map(row => row.slug)
 }
 
-export async function insertCampaign(db: Db, row: typeof campaigns.$inferInsert): Promise<void> {
+export async function insertCampaign(db: Queryable, row: typeof campaigns.$inferInsert): Promise<void> {
   await db.insert(campaigns).values(row)
 }
 
-export async function insertMembership(db: Db, row: typeof memberships.$inferInsert): Promise<void> {
+export async function insertMembership(db: Queryable, row: typeof memberships.$inferInsert): Promise<void> {
   await db.insert(memberships).values(row)
 }
 
 type CampaignChange = Partial<Pick<CampaignRow, 'title' | 'kind' | 'description' | 'selfReview' | 'archivedAt'>>
 
 /** False when the row is no longer at that version. */
-export async function updateCampaign(db: Db, { id, version, change }: { id: string, version: number, change: CampaignChange }): Promise<boolean> {
+export async function updateCampaign(db: Queryable, { id, version, change }: { id: string, version: number, change: CampaignChange }): Promise<boolean> {
   const [answer] = await db.update(campaigns)
     .set({ ...change, version: sql`${campaigns.version} + 1` })
     .where(and(eq(campaigns.id, id), eq(campaigns.version, version)))
@@ -50,7 +49,7 @@ export async function updateCampaign(db: Db, { id, version, change }: { id: stri
 
 const memberColumns = { userId: users.id, name: users.name, email: users.email, role: memberships.role, createdAt: memberships.createdAt }
 
-export const findMembers = (db: Db, campaignId: string, { after, limit }: { after: string | null, limit: number }) =>
+export const findMembers = (db: Queryable, campaignId: string, { after, limit }: { after: string | null, limit: number }) =>
   db.select(memberColumns)
     .from(memberships)
     .innerJoin(users, eq(users.id, memberships.userId))
@@ -58,4 +57,4 @@ export const findMembers = (db: Db, campaignId: string, { after, limit }: { afte
     .orderBy(asc(users.id))
     .limit(limit)
 
-export const countMembers = (db: Db, campaignId: string) => db.$count(memberships, eq(memberships.campaignId, campaignId))
+export const countMembers = (db: Queryable, campaignId: string) => db.$count(memberships, eq(memberships.campaignId, campaignId))

@@ -1,6 +1,6 @@
 import { and, asc, eq, gt } from 'drizzle-orm'
 import { users } from '../accounts/schema'
-import type { Database, Transaction } from '../client'
+import type { Queryable } from '../client'
 import { newId } from '../ids'
 import { logbook } from './schema'
 
@@ -14,11 +14,11 @@ export interface LogbookDeed {
 }
 
 /** Call it in the transaction of the deed, so that neither stands without the other. */
-export async function writeLogbook(db: Database | Transaction, deed: LogbookDeed): Promise<void> {
+export async function writeLogbook(db: Queryable, deed: LogbookDeed): Promise<void> {
   await writeLogbookEntries(db, [deed])
 }
 
-export async function writeLogbookEntries(db: Database | Transaction, deeds: LogbookDeed[]): Promise<void> {
+export async function writeLogbookEntries(db: Queryable, deeds: LogbookDeed[]): Promise<void> {
   if (deeds.length === 0) return
   const at = new Date()
   await db.insert(logbook).values(deeds.map(deed => ({ ...deed, id: newId(), detail: deed.detail ?? {}, at })))
@@ -26,7 +26,7 @@ export async function writeLogbookEntries(db: Database | Transaction, deeds: Log
 
 interface ObjectQuery { objectKind: string, objectId: string, after: string | null, limit: number }
 
-export const findLogbookEntries = (db: Database | Transaction, { objectKind, objectId, after, limit }: ObjectQuery) =>
+export const findLogbookEntries = (db: Queryable, { objectKind, objectId, after, limit }: ObjectQuery) =>
   db.select({ entry: logbook, actorName: users.name })
     .from(logbook)
     .leftJoin(users, eq(users.id, logbook.actorId))
@@ -34,5 +34,5 @@ export const findLogbookEntries = (db: Database | Transaction, { objectKind, obj
     .orderBy(asc(logbook.id))
     .limit(limit)
 
-export const countLogbookEntries = (db: Database | Transaction, objectKind: string, objectId: string) =>
+export const countLogbookEntries = (db: Queryable, objectKind: string, objectId: string) =>
   db.$count(logbook, and(eq(logbook.objectKind, objectKind), eq(logbook.objectId, objectId)))
