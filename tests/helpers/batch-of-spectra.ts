@@ -1,0 +1,28 @@
+import type { Connection } from 'mysql2/promise'
+import { nightSpectrum } from '../../docker-free-scripts/demo/night-spectrum.mjs'
+import { addAccount, addCampaign, type Account } from './accounts'
+
+export const settings = { observable: 'photon-emission', lineList: 'oh-meinel', bands: ['3-1'], lines: ['P1(2)', 'P1(3)', 'P1(4)', 'P1(5)'], strengthSet: 'brooke2016' }
+const about = { axisUnit: 'nm', medium: 'vacuum', valueKind: 'photons', columns: { axis: 0, values: 1, sigma: 2 } }
+
+export interface SpectraAtHand { owner: Account, slug: string, spectrumIds: string[] }
+
+/** A campaign whose owner gets a mail for each result, with spectra uploaded and nothing queued. */
+export async function uploadSpectra(connection: Connection, origin: string, slug: string, count: number): Promise<SpectraAtHand> {
+  const campaignId = await addCampaign(connection, slug)
+  const owner = await addAccount(connection, origin, { name: slug, preference: 'each', campaignId, role: 'observer' })
+  const spectrumIds: string[] = []
+  for (let start = 0; start < count; start += 50) {
+    const form = new FormData()
+    form.append('about', JSON.stringify(about))
+    for (let i = start; i < Math.min(count, start + 50); i++) {
+      const text: string = nightSpectrum({ band: '3-1', medium: 'vacuum', temperature: 180 + i / 10, seed: 1 + i, head: ['Invented test data.'] })
+      form.append('files', new Blob([text]), `${slug}-${i}.csv`)
+    }
+    const response = await fetch(`${origin}/api/campaigns/${slug}/spectra`, { method: 'POST', headers: { authorization: `Bearer ${owner.token}` }, body: form })
+    const { items } = await response.json() as { items: { ok: boolean, id: string, missing: string[] }[] }
+    if (!items.every(item => item.ok && item.missing.length === 0)) throw new Error(`Spectra were refused: ${JSON.stringify(items).slice(0, 400)}`)
+    spectrumIds.push(...items.map(item => item.id))
+  }
+  return { owner, slug, spectrumIds }
+}
