@@ -5,7 +5,9 @@
 /** Decimals that show an uncertainty with two significant digits (JCGM 100:2008, 7.2.6); none from 10 on, six at the most, one when it is not known. */
 export function decimalsFor(uncertainty: number | null | undefined): number {
   if (uncertainty == null || !(uncertainty > 0) || !Number.isFinite(uncertainty)) return 1
-  return Math.min(6, Math.max(0, 1 - Math.floor(Math.log10(uncertainty))))
+  // Rounded first: 0.0996 is 0.10, not 0.100.
+  const rounded = Number(uncertainty.toPrecision(2))
+  return Math.min(6, Math.max(0, 1 - Math.floor(Math.log10(rounded))))
 }
 
 export interface PrintedTemperature {
