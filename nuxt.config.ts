@@ -28,10 +28,11 @@ export default defineNuxtConfig({
   nitro: {
     preset: 'node-server',
     experimental: { tasks: true },
+    scheduledTasks: { '* * * * *': ['reconcile', 'deliver-mail', 'digests'], '17 * * * *': ['sweep'] },
     errorHandler: '~~/server/utils/error-handler.ts',
     // Before the sign-in module's own plugin.
     plugins: [fileURLToPath(new URL('./server/start/auth-origin.ts', import.meta.url))],
-    serverAssets: [{ baseName: 'migrations', dir: fileURLToPath(new URL('./drizzle', import.meta.url)) }],
+    serverAssets: [{ baseName: 'migrations', dir: fileURLToPath(new URL('./drizzle', import.meta.url)), pattern: '*.sql' }],
     esbuild: { options: { target: 'node20' } },
   },
   typescript: { strict: true, typeCheck: false },
