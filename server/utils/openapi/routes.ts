@@ -1,0 +1,11 @@
+import { accountRoutes, serviceRoutes } from './accounts'
+import { campaignRoutes } from './campaigns'
+import { lineListRoutes, logbookRoutes } from './line-lists'
+import { retrievalRoutes } from './retrievals'
+import { spectrumRoutes } from './spectra'
+import type { ApiRoute } from './types'
+
+/** Every route of the API; a test compares this with the files of server/api. */
+export const apiRoutes: ApiRoute[] = [
+  ...campaignRoutes, ...spectrumRoutes, ...retrievalRoutes, ...lineListRoutes, ...logbookRoutes, ...accountRoutes, ...serviceRoutes,
+]
