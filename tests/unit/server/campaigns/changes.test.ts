@@ -1,0 +1,21 @@
+import { describe, expect, it } from 'vitest'
+import { campaignKinds as kindsOfColumn } from '../../../../server/database/campaigns/schema'
+import { changesBetween } from '../../../../server/services/campaigns/changes'
+import { campaignKinds } from '#shared/schemas/campaign'
+
+describe('what the logbook says of a change', () => {
+  it('names each field that differs, from what to what', () => {
+    expect(changesBetween({ title: 'Old', kind: 'comet', tags: [1, 2] }, { title: 'New', kind: 'comet', tags: [2, 1] })).toEqual({
+      title: { from: 'Old', to: 'New' },
+      tags: { from: [1, 2], to: [2, 1] },
+    })
+  })
+
+  it('is silent about what was not sent', () => {
+    expect(changesBetween({ title: 'Old', description: 'x' }, { title: undefined })).toEqual({})
+  })
+})
+
+it('pages and database know the same kinds of campaign', () => {
+  expect([...campaignKinds]).toEqual([...kindsOfColumn])
+})
