@@ -4,7 +4,10 @@ import { normal } from './random.mjs'
 
 const background = 2.725
 
-/** An invented CO line table (K km/s) of one pointing at one temperature; noise is Gaussian and seeded. */
+/**
+ * An invented CO line table (K km/s) of one pointing at one temperature; noise is Gaussian and seeded.
+ * @param {{ name: string, temperature: number, seed: number, observedAt: string, labels?: string[], noise?: number }} pointing
+ */
 export function cloudTable({ name, temperature, seed, observedAt, labels = ['1-0', '2-1', '3-2', '4-3'], noise = 0.015 }) {
   const draw = normal(seed)
   const [band] = coRotation.bands

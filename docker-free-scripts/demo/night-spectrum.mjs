@@ -37,6 +37,7 @@ function profile(x, lines, fwhm) {
 /**
  * An invented night-sky spectrum as a text table: wavelength, photons, sigma. Noise is Gaussian and seeded.
  * `ceiling` clips the values as a full detector does.
+ * @param {{ band: string, temperature: number, seed: number, medium: string, head?: string[], bandStrength?: number, noise?: number, fwhm?: number, ceiling?: number }} night
  */
 export function nightSpectrum({ band, temperature, seed, medium, head = [], bandStrength = 400, noise = 6, fwhm = 0.22, ceiling = Infinity }) {
   const start = windowStart[band]
