@@ -9,5 +9,6 @@ export interface CookieNames { session: string, csrf: string, callback: string, 
 export function cookieNames(origin = config().origin, instance = config().instance): CookieNames {
   const secure = origin.startsWith('https:')
   const base = `${secure ? '__Host-' : ''}trotline-${instance}`
-  return { session: base, csrf: `${base}-csrf`, callback: `${base}-callback`, secure }
+  // No name may begin with another one's: the library takes such cookies for pieces of the shorter one.
+  return { session: `${base}-session`, csrf: `${base}-csrf`, callback: `${base}-callback`, secure }
 }

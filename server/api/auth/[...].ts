@@ -6,7 +6,7 @@ import { authConfig } from '../../utils/auth-config'
 import { addressOf, localPath, originOf, readForm, toAuthRequest } from '../../utils/auth-request'
 import { refuseForeignPage } from '../../utils/csrf-check'
 import { sessionOf } from '../../utils/session-cookie'
-import { admitAttempt, forgiveAttempts, TooManyAttempts } from '../../utils/sign-in-limit'
+import { admitAttempt, forgiveAttempts, TooManyAttempts } from '../../services/accounts/sign-in-limit'
 
 /** Signing in and out, and the session as the pages see it. */
 export default defineEventHandler(async (event) => {

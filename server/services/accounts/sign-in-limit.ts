@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto'
 import { DomainError } from '#shared/utils/domain-error'
-import { countDown, countUp, forgetCount } from '../jobs/counter'
+import { countDown, countUp, forgetCount } from '../../jobs/counter'
 
 const windowSeconds = 15 * 60
 // A person mistypes a few times; a house behind one address has many people; an account is tried from many addresses.

@@ -1,20 +1,19 @@
 import { randomUUID } from 'node:crypto'
 import { rm, writeFile } from 'node:fs/promises'
 import { join } from 'node:path'
-import { config } from '../config'
-import { databasePool } from '../database/client'
-import { schemaIsCurrent } from '../database/migrate'
-import { redisAnswers } from '../jobs/counter'
-import { bundledMigrations } from './start-up'
+import { config } from '../../config'
+import { databasePool } from '../../database/client'
+import { schemaIsCurrent, type Migration } from '../../database/migrate'
+import { redisAnswers } from '../../jobs/counter'
 
 export type CheckResult = 'ok' | 'down'
 export interface Readiness { status: 'ready' | 'degraded' | 'unavailable', role: string, checks: Record<'database' | 'schema' | 'storage' | 'redis', CheckResult> }
 
 /** Whether this process can do its work now. Without Redis submissions still succeed and wait: degraded, not away. */
-export async function readiness(): Promise<Readiness> {
+export async function readiness(migrations: Migration[]): Promise<Readiness> {
   const [database, schema, storage, redis] = await Promise.all([
     check(async () => void await databasePool().query('SELECT 1')),
-    check(schemaCheck),
+    check(() => schemaCheck(migrations)),
     check(storageCheck),
     check(async () => {
       if (!await redisAnswers()) throw new Error('no answer')
@@ -25,8 +24,8 @@ export async function readiness(): Promise<Readiness> {
   return { status, role: config().role, checks: { database, schema, storage, redis } }
 }
 
-async function schemaCheck(): Promise<void> {
-  if (!await schemaIsCurrent(databasePool(), await bundledMigrations())) throw new Error('the schema is not current')
+async function schemaCheck(migrations: Migration[]): Promise<void> {
+  if (!await schemaIsCurrent(databasePool(), migrations)) throw new Error('the schema is not current')
 }
 
 async function storageCheck(): Promise<void> {
