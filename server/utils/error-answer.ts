@@ -23,6 +23,8 @@ export function toErrorAnswer(error: unknown, requestId: string): ErrorAnswer {
   if (causes.some(cause => codesOf(cause).some(code => connectionFaults.has(code)))) {
     return { ...answer('dependency_down', `A service this needs is not reachable; try again shortly. (request ${requestId})`), unexpected: true }
   }
+  const inner = causes.map(innerError).find(Boolean)
+  if (inner) return { ...answer(inner.code, inner.message), unexpected: errorStatus[inner.code] >= 500 }
   const known = causes.map(cause => byStatus[statusOf(cause)]).find(Boolean)
   if (known) return answer(known.code, known.message)
   return { ...answer('internal', `Something went wrong on our side; it has been logged as request ${requestId}.`), unexpected: true }
@@ -39,6 +41,12 @@ function causesOf(error: unknown): unknown[] {
   const chain: unknown[] = []
   for (let next = error; next != null && chain.length < 8; next = (next as { cause?: unknown }).cause) chain.push(next)
   return chain
+}
+
+/** A page that was being drawn had asked our own API and was refused: the same answer holds for the page. */
+function innerError(cause: unknown): ErrorBody['error'] | undefined {
+  const error = (cause as { data?: Partial<ErrorBody> | null }).data?.error
+  return error && error.code in errorStatus ? error : undefined
 }
 
 function codesOf(cause: unknown): string[] {

@@ -1,3 +1,4 @@
+import { STATUS_CODES } from 'node:http'
 import { getRequestHeaders, getResponseHeader, send, setResponseHeader, setResponseStatus, type H3Error, type H3Event } from 'h3'
 import { useNitroApp } from 'nitropack/runtime'
 import { logger } from '../logger'
@@ -9,7 +10,8 @@ export default async function errorHandler(error: H3Error, event: H3Event): Prom
   const requestId = event.context.requestId ?? 'unknown'
   const answer = toErrorAnswer(error, requestId)
   if (answer.unexpected) logger.error({ err: error, requestId, method: event.method, path: event.path.split('?')[0] }, 'request failed')
-  setResponseStatus(event, answer.status)
+  // The standard words: the thrown ones may repeat what was asked for.
+  setResponseStatus(event, answer.status, STATUS_CODES[answer.status])
   setResponseHeader(event, 'cache-control', 'no-store')
   if (event.path.startsWith('/api/') || isRenderingErrorPage(event)) return sendJson(event, answer)
   const page = await renderErrorPage(event, answer)

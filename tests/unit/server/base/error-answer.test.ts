@@ -34,6 +34,11 @@ describe('an error becomes an answer', () => {
     expect(toErrorAnswer(error, 'r1')).toMatchObject({ status: 503, body: { error: { code: 'dependency_down' } }, unexpected: true })
   })
 
+  it('what our own API refused to a page that was being drawn is what the page answers', () => {
+    const refusal = Object.assign(new Error('[GET] "/api/auth/session": 503'), { data: { error: { code: 'dependency_down', message: 'Not reachable.' } } })
+    expect(toErrorAnswer(createError({ statusCode: 500, unhandled: true, cause: refusal }), 'r1')).toMatchObject({ status: 503, body: { error: { message: 'Not reachable.' } } })
+  })
+
   it('the message of a framework error is ours, not the framework\'s', () => {
     const answer = toErrorAnswer(createError({ statusCode: 404, message: 'Cannot find any route matching /x' }), 'r1')
     expect(answer.body.error).toEqual({ code: 'not_found', message: 'There is nothing at this address.' })
