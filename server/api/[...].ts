@@ -1,3 +1,4 @@
+/// <reference path="../types/nitro-virtual.d.ts" />
 import { defineEventHandler, setResponseHeader } from 'h3'
 // The server's own list of routes.
 import { handlers } from '#nitro-internal-virtual/server-handlers'

@@ -1,7 +1,7 @@
 import { sendWebResponse, setResponseHeader, setResponseStatus, type H3Event } from 'h3'
 import { cookieNames } from './auth-cookies'
 import { originOf } from './auth-request'
-import { TooManyAttempts } from '../services/accounts/sign-in-limit'
+import type { TooManyAttempts } from '../services/accounts/sign-in-limit'
 
 /** The library answers a wrong password with 200; scripts and logs want it said by the status. */
 export async function sendAuthResponse(event: H3Event, response: Response): Promise<unknown> {
