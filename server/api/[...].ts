@@ -1,6 +1,5 @@
-/// <reference path="../types/nitro-virtual.d.ts" />
 import { defineEventHandler, setResponseHeader } from 'h3'
-// The server's own list of routes.
+// @ts-expect-error The server's own list of routes exists in the built server only.
 import { handlers } from '#nitro-internal-virtual/server-handlers'
 import { DomainError } from '#shared/utils/domain-error'
 import { methodsAt, type KnownRoute } from '../utils/route-match'

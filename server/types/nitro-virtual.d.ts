@@ -1,3 +1,0 @@
-declare module '#nitro-internal-virtual/server-handlers' {
-  export const handlers: { route?: string, method?: string }[]
-}
