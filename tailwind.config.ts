@@ -2,7 +2,7 @@ import type { Config } from 'tailwindcss'
 
 const token = (name: string): string => `oklch(var(--${name}) / <alpha-value>)`
 const names = [
-  'surface', 'surface-raised', 'surface-sunken', 'ink', 'ink-muted', 'rule', 'rule-strong', 'accent', 'accent-soft', 'on-accent',
+  'surface', 'surface-raised', 'surface-sunken', 'ink', 'ink-muted', 'rule', 'rule-strong', 'accent', 'accent-soft', 'action', 'on-action',
   'ok', 'warn', 'warn-soft', 'bad', 'bad-soft', 'series-1', 'series-2', 'series-3', 'series-4', 'series-5', 'series-6',
 ]
 

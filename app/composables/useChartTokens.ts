@@ -32,6 +32,8 @@ export function useChartTokens(): Ref<ChartTokens> {
   const colorMode = useColorMode()
   const version = useTokenVersion()
   const tokens = shallowRef(read())
+  // A canvas does not wait for its font: draw again once it is there.
+  void document.fonts?.load('12px "Atkinson Mono"').then((faces) => { if (faces.length) tokens.value = read() })
   watch([() => colorMode.value, version], async () => {
     await nextTick()
     tokens.value = read()

@@ -25,8 +25,8 @@ describe.each(['day', 'night', 'dome'])('the %s theme', (name) => {
     }
   })
 
-  it('writes on the accent at 4.5:1 or more', () => {
-    expect(tokenContrast(tokens['on-accent']!, tokens.accent!)).toBeGreaterThanOrEqual(4.5)
+  it('writes on a main button at 4.5:1 or more', () => {
+    expect(tokenContrast(tokens['on-action']!, tokens.action!)).toBeGreaterThanOrEqual(4.5)
   })
 
   it('draws series and the edges of fields at 3:1 or more', () => {
