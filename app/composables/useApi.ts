@@ -6,6 +6,8 @@ export interface ApiOptions {
   body?: BodyInit | Record<string, unknown> | unknown[] | null
   headers?: Record<string, string>
   signal?: AbortSignal
+  /** @default 'json' */
+  responseType?: 'json' | 'blob' | 'text'
 }
 export type ApiCall = <T>(path: string, options?: ApiOptions) => Promise<T>
 

@@ -1,4 +1,4 @@
-import { computed, shallowRef } from 'vue'
+import { computed, shallowRef, toValue, watch, type MaybeRefOrGetter } from 'vue'
 import type { SpectrumAbout } from '#shared/types/spectrum'
 import { knownAbout, newEntry, withAnswer, type FileEntry } from '~/utils/submit/entries'
 import type { useEngineWorker } from './useEngineWorker'
@@ -9,7 +9,7 @@ export const fileLimit = 1000
 const wordsOf = (thrown: unknown) => (thrown instanceof Error ? thrown.message : String(thrown))
 
 /** The chosen files, each read in the worker as soon as it is added; the page keeps a summary, never the numbers. */
-export function useFileReading(ask: Ask) {
+export function useFileReading(ask: Ask, common: MaybeRefOrGetter<Partial<SpectrumAbout>> = {}) {
   const entries = shallowRef<FileEntry[]>([])
   const selectedId = shallowRef<number | null>(null)
   const refusal = shallowRef<string | null>(null)
@@ -39,7 +39,7 @@ export function useFileReading(ask: Ask) {
     const fresh = files.filter(file => !known.has(keyOf(file)))
     const room = fileLimit - entries.value.length
     refusal.value = fresh.length > room ? `One submission takes ${fileLimit} files; ${fresh.length - room} were left out. Submit them next.` : null
-    const added = fresh.slice(0, Math.max(room, 0)).map(file => newEntry(++lastId, file))
+    const added = fresh.slice(0, Math.max(room, 0)).map(file => ({ ...newEntry(++lastId, file), common: toValue(common) }))
     entries.value = [...entries.value, ...added]
     selectedId.value ??= added[0]?.id ?? null
     for (const entry of added) await read(entry)
@@ -63,6 +63,8 @@ export function useFileReading(ask: Ask) {
     entries.value = []
     selectedId.value = null
   }
+
+  watch(() => toValue(common), said => { entries.value = entries.value.map(entry => ({ ...entry, common: said })) })
 
   return { entries, selected, selectedId, refusal, add, remove, answer, patch, clear }
 }

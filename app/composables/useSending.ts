@@ -1,18 +1,15 @@
 import { shallowRef, type ShallowRef } from 'vue'
+import type { UploadItem } from '#shared/schemas/spectrum-view'
 import type { SpectrumAbout } from '#shared/types/spectrum'
 import { groupBy, uploadSlices } from '~/utils/submit/slices'
 import type { FileEntry } from '~/utils/submit/entries'
 
-/** One item of the answer to an upload, in the order of the files. */
-export interface StoredItem { name: string, ok: boolean, id?: string, warnings: string[], missing: string[], error?: { message: string } | string }
-
 export interface SendingParts {
   entries: ShallowRef<FileEntry[]>
   patch: (id: number, change: Partial<FileEntry>) => void
-  upload: (campaign: string, files: File[], about: Partial<SpectrumAbout>) => Promise<{ items: StoredItem[] }>
+  upload: (campaign: string, files: File[], about: Partial<SpectrumAbout>) => Promise<{ items: UploadItem[] }>
 }
 
-const messageOf = (error: StoredItem['error']) => (typeof error === 'string' ? error : error?.message ?? 'The service refused this file.')
 
 /**
  * Stores the files slice by slice. A slice that fails keeps its files, so that the next attempt sends only what is
@@ -22,9 +19,9 @@ export function useSending({ entries, patch, upload }: SendingParts) {
   const sent = shallowRef(0)
   const total = shallowRef(0)
 
-  function settle(entry: FileEntry, item: StoredItem | undefined) {
+  function settle(entry: FileEntry, item: UploadItem | undefined) {
     if (item?.ok && item.id) patch(entry.id, { state: 'stored', spectrumId: item.id, remarks: item.warnings, error: null })
-    else patch(entry.id, { state: 'refused', error: messageOf(item?.error) })
+    else patch(entry.id, { state: 'refused', error: item?.error?.message ?? 'The service refused this file.' })
     sent.value += 1
   }
 

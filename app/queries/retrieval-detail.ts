@@ -1,4 +1,5 @@
 import type { SettingsPatch } from '#shared/schemas/retrieval-submit'
+import type { SpectrumView } from '#shared/schemas/spectrum-view'
 import type { PictureData, RetrievalDetail } from '#shared/types/retrieval'
 import type { SpectrumAbout } from '#shared/types/spectrum'
 
@@ -27,12 +28,11 @@ export function useRetrievalActions(id: MaybeRefOrGetter<string>) {
   }
 }
 
-export interface SpectrumRow { id: string, version: number, about: SpectrumAbout }
-
 export function useSpectrumCalls() {
   const api = useApi()
   return {
-    get: (id: string) => api<SpectrumRow>(`/api/spectra/${id}`),
+    get: (id: string) => api<SpectrumView>(`/api/spectra/${id}`),
+    bytes: (id: string) => api<Blob>(`/api/spectra/${id}/bytes`, { responseType: 'blob' }),
     amend: (id: string, version: number, about: Partial<SpectrumAbout>) => api(`/api/spectra/${id}`, { method: 'PATCH', body: { version, about } }),
   }
 }

@@ -1,6 +1,6 @@
 import type { SubmitRetrievals } from '#shared/schemas/retrieval-submit'
+import type { UploadItem } from '#shared/schemas/spectrum-view'
 import type { SpectrumAbout } from '#shared/types/spectrum'
-import type { StoredItem } from '~/composables/useSending'
 
 export interface Submitted { batchId: string, ids: string[] }
 
@@ -12,9 +12,9 @@ export function useSubmissionCalls() {
       const form = new FormData()
       form.append('about', JSON.stringify(about))
       for (const file of files) form.append('files', file, file.name)
-      return api<{ items: StoredItem[] }>(`/api/campaigns/${campaign}/spectra`, { method: 'POST', body: form })
+      return api<{ items: UploadItem[] }>(`/api/campaigns/${campaign}/spectra`, { method: 'POST', body: form })
     },
-    queue(campaign: string, body: Partial<SubmitRetrievals>, key: string) {
+    queue(campaign: string, body: Record<string, unknown> & Partial<SubmitRetrievals>, key: string) {
       return api<Submitted>(`/api/campaigns/${campaign}/retrievals`, { method: 'POST', body, headers: { 'idempotency-key': key } })
     },
   }

@@ -1,5 +1,6 @@
 import type { RetrievalSettings } from '#shared/schemas/settings'
 import type { Provenance, RetrievalDetail } from '#shared/types/retrieval'
+import { methodWords, noiseWords, observableWords } from '~/utils/setting-words'
 
 export interface Fact { name: string, value: string, code?: boolean }
 
@@ -17,12 +18,12 @@ export function provenanceFacts(provenance: Provenance): Fact[] {
 
 export function settingsFacts(settings: RetrievalSettings): Fact[] {
   const facts: Fact[] = [
-    { name: 'observable', value: settings.observable, code: true },
+    { name: 'observable', value: observableWords[settings.observable] },
     { name: 'line list', value: settings.lineList ?? 'none: molecular data given with the lines', code: settings.lineList !== null },
     { name: 'bands', value: settings.bands.join(', ') || 'the only band of the list', code: settings.bands.length > 0 },
     { name: 'lines', value: settings.lines.join(', ') || 'the recommended lines of the list', code: settings.lines.length > 0 },
     { name: 'strength set', value: settings.strengthSet ?? 'the recommended set that is complete for these lines', code: settings.strengthSet !== null },
-    { name: 'method', value: settings.method, code: true },
+    { name: 'method', value: methodWords[settings.method] },
     { name: 'noise', value: noiseWords[settings.noise] },
     { name: 'line profile', value: `${settings.profile.shape}, width ${settings.profile.fwhm === null ? 'free' : `${settings.profile.fwhm} nm`}, shift ${settings.shift}` },
     { name: 'continuum order', value: String(settings.continuumOrder), code: true },
@@ -34,15 +35,9 @@ export function settingsFacts(settings: RetrievalSettings): Fact[] {
   return settings.observable === 'brightness-integral' ? [...facts, { name: 'background', value: `${settings.Tbg} K`, code: true }] : facts
 }
 
-export const noiseWords: Record<RetrievalSettings['noise'], string> = {
-  'absolute': 'sigmas are standard uncertainties',
-  'relative': 'sigmas known up to a common factor',
-  'from-residuals': 'taken from the residuals of the fit',
-}
-
 export function inputFacts(detail: RetrievalDetail): Fact[] {
   const { spectrum, lineTable } = detail
-  if (!spectrum) return [{ name: 'input', value: `line table of ${lineTable?.lines.length ?? 0} lines, given as ${lineTable?.observable ?? 'unknown'}` }]
+  if (!spectrum) return [{ name: 'input', value: `line table of ${lineTable?.lines.length ?? 0} lines, given as ${lineTable ? observableWords[lineTable.observable] : 'unknown'}` }]
   const { about } = spectrum
   return [
     { name: 'file', value: `${spectrum.name} (${spectrum.format}, ${spectrum.pixelCount} pixels)` },
