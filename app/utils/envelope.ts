@@ -6,10 +6,10 @@ export function rotorEnvelope(levels: number, theta: number): number[] {
 }
 
 /** One stroke of an envelope picture; both lengths are shares of the picture. */
-export interface EnvelopeStroke { label: string, x: number, measured: number, model: number | null, used: boolean }
+export interface EnvelopeStroke { label: string, x: number, measured: number, model: number | null }
 
 /** Places a result's lines along their upper energy and scales the strokes to the strongest. Lines that are not positive hang at zero length. */
-export function envelopeStrokes(lines: { label: string, termEnergy: number, intensity: number, model: number | null, used: boolean }[]): EnvelopeStroke[] {
+export function envelopeStrokes(lines: { label: string, termEnergy: number, intensity: number, model: number | null }[]): EnvelopeStroke[] {
   const energies = lines.map(line => line.termEnergy)
   const low = Math.min(...energies)
   const span = Math.max(...energies) - low || 1
@@ -20,6 +20,5 @@ export function envelopeStrokes(lines: { label: string, termEnergy: number, inte
     x: lines.length === 1 ? 0.5 : (line.termEnergy - low) / span,
     measured: share(line.intensity),
     model: line.model == null ? null : share(line.model),
-    used: line.used,
   }))
 }

@@ -97,7 +97,7 @@ describe('rotorEnvelope', () => {
 
 describe('envelopeStrokes', () => {
   it('places lines by energy and lets one that is not positive hang at no length', () => {
-    const line = (label: string, termEnergy: number, intensity: number) => ({ label, termEnergy, intensity, model: null, used: true })
+    const line = (label: string, termEnergy: number, intensity: number) => ({ label, termEnergy, intensity, model: null })
     expect(envelopeStrokes([line('a', 0, 10), line('b', 50, -3), line('c', 100, 5)]).map(stroke => [stroke.x, stroke.measured])).toEqual([[0, 1], [0.5, 0], [1, 0.5]])
   })
 })
