@@ -179,6 +179,8 @@ export interface RetrievalResult {
   crossChecks: CrossCheck[]
   /** T by band, with a chi2 of their agreement; empty for one band. */
   byBand: { band: string, temperature: number | null, uNoise: number | null }[]
+  /** chi2 of the bands' 1/T about their weighted mean; absent below two bands with a temperature. */
+  bandAgreement?: { chi2: number, dof: number, pValue: number }
   flags: FlagName[]
   cautions: string[]
   strengthSets: { name: string, temperature: number | null, uNoise: number | null }[]

@@ -1,4 +1,3 @@
-import { C2 } from '../constants'
 import { lineStrength } from '../line-model/line-strength'
 import { lineValue } from '../line-model/line-value'
 import type { LineRetrievalInput, MeasuredLine, ObservableReading, ResultLine } from '../types'
@@ -69,9 +68,4 @@ function modelValue(line: MeasuredLine, reading: ObservableReading, model: Fitte
   const scale = model.scaleOf(line.band)
   if (scale === undefined || !(lineStrength(line, reading).strength > 0)) return null
   return finiteOrNull(scale * lineValue(line, reading, model.beta, model.referenceEnergy).value)
-}
-
-/** Intercept of the plot's line from a scale that refers to energies above `referenceEnergy`. */
-export function plotIntercept(scale: number, beta: number, referenceEnergy: number): number {
-  return Math.log(scale) + beta * C2 * referenceEnergy
 }

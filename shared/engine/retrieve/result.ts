@@ -1,44 +1,48 @@
 import { orderedFlags } from '../flags'
 import { chiSquareTail } from '../statistics/chi-square'
-import type { LineRetrievalInput, RetrievalResult } from '../types'
+import { defaultTemperatureRange } from '../thresholds'
+import type { LineRetrievalInput, RetrievalResult, TemperatureValue } from '../types'
+import { diagnose } from './diagnose'
 import { finiteOrNull } from './finite'
 import type { TableFit } from './fit-table'
 import { inputFlags } from './input-flags'
+import { plotLines } from './plot-lines'
+import { resultFlags } from './result-flags'
 import { resultLines } from './result-lines'
 import type { LineSelection } from './select-lines'
-import { temperatureValue } from './temperature-value'
 
 /** The result of a retrieval that found a temperature. */
-export function resultOf(input: LineRetrievalInput, selection: LineSelection, fitted: TableFit): RetrievalResult {
-  const { fit, dof, profile, bands } = fitted
-  const model = {
-    beta: fit.beta,
-    referenceEnergy: profile.problem.model.referenceEnergy,
-    scaleOf: (band: string) => fit.scales[bands.length === 1 && bands[0] === 'all' ? 0 : bands.indexOf(band)] as number | undefined,
-    diagnostics: new Map(),
-    sigma: null,
-  }
-  return {
-    temperature: temperatureValue(fitted),
+export function resultOf(input: LineRetrievalInput, selection: LineSelection, fitted: TableFit, noise: TemperatureValue): RetrievalResult {
+  const { fit, dof } = fitted
+  const { diagnosis, model } = diagnose(input, selection, fitted)
+  // JCGM 100:2008, 5.1.2: components combine in quadrature, at the very end.
+  const temperature = { ...noise, uSystematic: Math.hypot(...diagnosis.components.map(component => component.kelvin)) }
+  const result: Omit<RetrievalResult, 'flags'> = {
+    temperature,
     method: 'envelope',
     strengthSet: input.strengthSet,
-    scales: bands.map((band, b) => ({ band, value: fit.scales[b], uNoise: finiteOrNull(Math.sqrt(fit.covariance[(b + 1) * (bands.length + 2)])) })),
+    scales: scalesOf(fitted),
     chi2: input.noise === 'from-residuals' ? null : fit.chi2,
     dof,
     pValue: input.noise === 'absolute' && dof > 0 ? chiSquareTail(fit.chi2, dof) : null,
-    curvatureZ: null,
-    leverArm: null,
-    weakestSignalToNoise: null,
     beta: { value: fit.beta, uNoise: fitted.uBeta ?? 0 },
     iterations: fit.iterations,
     converged: true,
+    ...diagnosis,
     lines: resultLines(input, selection, model),
-    plotLines: [],
-    crossChecks: [],
-    byBand: [],
-    flags: orderedFlags(inputFlags(input, selection)),
+    plotLines: plotLines(fitted),
     cautions: input.cautions ?? [],
-    strengthSets: [],
-    components: [],
   }
+  const range = input.temperatureRange ?? defaultTemperatureRange
+  return { ...result, flags: orderedFlags([...inputFlags(input, selection), ...resultFlags(result, temperature, range)]) }
+}
+
+/** Scales for w and energies above the lowest used one, with their uncertainty; not known with relative noise and no degree of freedom. */
+function scalesOf({ fit, bands, varianceFactor }: TableFit): RetrievalResult['scales'] {
+  const size = bands.length + 1
+  return bands.map((band, b) => ({
+    band,
+    value: finiteOrNull(fit.scales[b]) ?? 0,
+    uNoise: varianceFactor === null ? null : finiteOrNull(Math.sqrt(fit.covariance[(b + 1) * (size + 1)] * varianceFactor)),
+  }))
 }
