@@ -16,9 +16,8 @@ export function chooseColumns(table: Float64Array[], headings: ColumnHeading[], 
   if (said) return { columns: checkSaid(said, table.length), certain: true }
   const { axis, values, sigma } = guessColumns(headings)
   if (axis !== null && values !== null) return { columns: { axis, values, sigma }, certain: true }
-  const proposed = propose(table, axis)
-  const onlyReading = headings.length ? axis !== null : proposed.axis === 0
-  return { columns: proposed, certain: table.length === 2 && onlyReading }
+  if (table.length === 2 && headings.length === 0) return { columns: { axis: 0, values: 1, sigma: null }, certain: true }
+  return { columns: propose(table, axis), certain: table.length === 2 && axis !== null }
 }
 
 function propose(table: Float64Array[], namedAxis: number | null): Columns {
