@@ -123,8 +123,10 @@ export class SingleProfile implements ChiSquareProfile {
         yf += y[i] * value
         ff += value * value
       }
-      if (yf > 0 && yf * yf > largest * ff) {
-        largest = yf * yf / ff
+      // In this order so that steep tables overflow to a comparison that fails, not to an infinite gain.
+      const gain = yf > 0 ? yf / ff * yf : 0
+      if (gain > largest) {
+        largest = gain
         best = k
       }
     }

@@ -16,8 +16,9 @@ export function inputProblem(input: LineRetrievalInput, usedCount: number): stri
 /** Why a fit gave no temperature, in words; undefined when it gave one. */
 export function fitProblem(fitted: TableFit): string | undefined {
   const { fit, dof, table } = fitted
-  if (table.intensity.every(value => value <= 0)) return 'No used line has a positive intensity.'
-  if (fit.reason === 'no-positive-scale') return 'The intensities fit no positive scale at any temperature.'
+  if (fit.reason === 'no-positive-scale') {
+    return table.intensity.every(value => value <= 0) ? 'No used line has a positive intensity.' : 'The intensities fit no positive scale at any temperature.'
+  }
   if (dof < 0) return `${table.lines.length} lines do not determine a temperature and ${fitted.bands.length} scales.`
   if (fit.reason === 'no-information') return 'The used lines of a band share one energy, so their ratios do not depend on temperature.'
   if (fit.reason === 'falls-to-hot-end') return `The lines do not bound the temperature: chi2 falls up to the hot end of the search range, ${kelvin(1 / table.betaRange[0])}.${boundWords(fitted, 'above')}`

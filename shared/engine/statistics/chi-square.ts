@@ -16,5 +16,5 @@ export function chiSquareTail(x: number, dof: number): number {
 export function chiSquareQuantile(p: number, dof: number): number {
   if (!(p > 0)) return 0
   if (p >= 1) return Infinity
-  return positiveQuantile(x => chiSquareCdf(x, dof), x => chiSquareTail(x, dof), x => poissonTerm(dof / 2, x / 2) * dof / (2 * x), p, dof)
+  return positiveQuantile(x => chiSquareCdf(x, dof), x => chiSquareTail(x, dof), x => poissonTerm(dof / 2, x / 2) * dof / (2 * x), p, 1 - p, dof)
 }

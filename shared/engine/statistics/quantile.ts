@@ -5,11 +5,12 @@
  * @param upper its complement; the smaller of the two is compared, so that both tails keep their digits
  * @param density derivative of cdf
  * @param p probability, 0 < p < 1
+ * @param q 1 - p, given for its digits
  * @param start a rough guess, > 0
  */
-export function positiveQuantile(lower: (x: number) => number, upper: (x: number) => number, density: (x: number) => number, p: number, start: number): number {
-  const useLower = p <= 0.5
-  const excess = (x: number) => useLower ? lower(x) - p : (1 - p) - upper(x)
+export function positiveQuantile(lower: (x: number) => number, upper: (x: number) => number, density: (x: number) => number, p: number, q: number, start: number): number {
+  const useLower = p <= q
+  const excess = (x: number) => useLower ? lower(x) - p : q - upper(x)
   let low = 0
   let high = Infinity
   let x = start

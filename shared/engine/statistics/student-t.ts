@@ -18,5 +18,7 @@ export function studentCoverageFactor(coverage: number, dof: number): number {
 
 /** x with P(t <= x) = p; infinite at p = 0 and 1. */
 export function studentQuantile(p: number, dof: number): number {
-  return p < 0.5 ? -studentCoverageFactor(1 - 2 * p, dof) : studentCoverageFactor(2 * p - 1, dof)
+  const tail = 2 * Math.min(p, 1 - p)
+  const size = Math.sqrt(fisherQuantile(Math.abs(1 - 2 * p), 1, dof, tail))
+  return p < 0.5 ? -size : size
 }
