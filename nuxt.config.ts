@@ -1,5 +1,7 @@
 import { fileURLToPath } from 'node:url'
 
+const indexing = { compilerOptions: { noUncheckedIndexedAccess: false } }
+
 export default defineNuxtConfig({
   modules: ['@nuxt/eslint', '@pinia/nuxt', '@nuxtjs/tailwindcss', '@nuxtjs/color-mode', '@vueuse/nuxt', '@nuxt/icon', '@sidebase/nuxt-auth'],
   compatibilityDate: '2026-01-01',
@@ -34,8 +36,16 @@ export default defineNuxtConfig({
     plugins: [fileURLToPath(new URL('./server/start/auth-origin.ts', import.meta.url))],
     serverAssets: [{ baseName: 'migrations', dir: fileURLToPath(new URL('./drizzle', import.meta.url)), pattern: '*.sql' }],
     esbuild: { options: { target: 'node20' } },
+    typescript: { tsConfig: indexing },
   },
-  typescript: { strict: true, typeCheck: false },
+  typescript: {
+    strict: true,
+    typeCheck: false,
+    // The engine indexes typed arrays in its loops; its own tsconfig says the same.
+    tsConfig: indexing,
+    sharedTsConfig: indexing,
+    nodeTsConfig: indexing,
+  },
   eslint: { config: { stylistic: false } },
   vite: { worker: { format: 'es' } },
 })
