@@ -59,6 +59,7 @@ function allZero(values: Float64Array): boolean {
 /** Block inverse of the Fisher matrix: var(beta) = 1/information, and each scale follows beta along its slope. */
 function scalesAndCovariance(profile: ChiSquareProfile, beta: number): Pick<EnvelopeFit, 'scales' | 'covariance'> {
   const { model, bandCount } = profile.problem
+  if (bandCount === 1 && model.kind === 'plain') return singleScale(profile)
   const unit = Math.exp(shapeExponent(model, beta)) / model.strengthUnit
   const rate = shapeExponentRate(model, beta)
   const variance = 1 / profile.information
@@ -76,4 +77,13 @@ function scalesAndCovariance(profile: ChiSquareProfile, beta: number): Pick<Enve
     }
   }
   return { scales, covariance }
+}
+
+/** The same for one scale and phi = e^{-e beta}, where no common factor was taken out. */
+function singleScale(profile: ChiSquareProfile): Pick<EnvelopeFit, 'scales' | 'covariance'> {
+  const unit = 1 / profile.problem.model.strengthUnit
+  const variance = 1 / profile.information
+  const slope = profile.slopes[0] * unit
+  const mixed = slope * variance
+  return { scales: [profile.scales[0] * unit], covariance: [variance, mixed, mixed, profile.scaleCovariance(0, 0) * unit * unit + slope * mixed] }
 }

@@ -21,6 +21,5 @@ functions = {
     'fisherQuantile': lambda p, m, n: stats.f.ppf(p, m, n),
     'studentCdf': lambda x, dof: stats.t.cdf(x, dof),
     'studentTail': lambda x, dof: stats.t.sf(x, dof),
-    'studentQuantile': lambda p, dof: stats.t.ppf(p, dof),
 }
 print(json.dumps([float(functions[name](*arguments)) for name, arguments in json.load(sys.stdin)]))
