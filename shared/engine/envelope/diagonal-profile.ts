@@ -12,6 +12,7 @@ export class DiagonalProfile implements ChiSquareProfile {
   information = 0
   rawInformation = 0
   scanChi2 = 0
+  readonly dataSquares: number
   readonly scales: Float64Array
   readonly slopes: Float64Array
   private readonly shapes: Shapes
@@ -26,6 +27,7 @@ export class DiagonalProfile implements ChiSquareProfile {
     this.scales = new Float64Array(bands)
     this.slopes = new Float64Array(bands)
     this.shapes = createShapes(problem.model.lineCount)
+    this.dataSquares = problem.intensity.reduce((sum, value, i) => sum + (value * problem.inverseSigma[i]) ** 2, 0)
     this.yf = new Float64Array(bands)
     this.ff = new Float64Array(bands)
     this.fd = new Float64Array(bands)

@@ -29,16 +29,31 @@ export function minimiseProfile(profile: ChiSquareProfile): Minimum {
   if (started > low && started < high && profile.evaluate(started) < gridChi2) {
     const below = low * 2 ** Math.floor(Math.log2(started / low))
     const end = newtonToMinimum(profile, started, below, Math.min(high, 2 * below))
-    return ended(end, count + 1)
+    return ended(profile, end, count + 1)
   }
   const edge = edgeOf(profile, k, count, gridChi2)
   if (edge !== 'none') return { beta: edge === 'low-beta' ? low : high, converged: false, edge, iterations: 0, evaluations: count + 2 }
   profile.evaluate(gridBeta)
-  return ended(newtonToMinimum(profile, gridBeta, Math.max(low, gridBeta / 2), Math.min(high, 2 * gridBeta)), count + 3)
+  return ended(profile, newtonToMinimum(profile, gridBeta, Math.max(low, gridBeta / 2), Math.min(high, 2 * gridBeta)), count + 3)
 }
 
-function ended(end: NewtonEnd, evaluationsBefore: number): Minimum {
-  return { beta: end.beta, converged: end.converged, edge: 'none', iterations: end.iterations, evaluations: evaluationsBefore + end.iterations }
+function ended(profile: ChiSquareProfile, end: NewtonEnd, evaluationsBefore: number): Minimum {
+  const evaluations = evaluationsBefore + end.iterations
+  // Only a minimum wider than beta itself can reach an end of the range.
+  const edge = profile.information * end.beta ** 2 < 1 ? flatEnd(profile, end.beta) : 'none'
+  return { beta: end.beta, converged: end.converged, edge, iterations: end.iterations, evaluations }
+}
+
+/** Share of the data's sum of squares below which two values of chi2 differ by rounding only. */
+const rounding = 1e-14
+
+/** The end of the range up to which chi2 stays at its minimum to rounding: exponentials that have died out bound nothing. */
+function flatEnd(profile: ChiSquareProfile, beta: number): Minimum['edge'] {
+  const [low, high] = profile.problem.betaRange
+  const least = profile.chi2 + rounding * profile.dataSquares
+  const edge = profile.evaluate(high) <= least ? 'high-beta' : profile.evaluate(low) <= least ? 'low-beta' : 'none'
+  profile.evaluate(beta)
+  return edge
 }
 
 /** Does chi2 keep falling out of the range at the end next to grid point k? The profile then stands at that end. */

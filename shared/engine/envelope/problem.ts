@@ -21,6 +21,8 @@ export interface EnvelopeProblem {
  */
 export interface ChiSquareProfile {
   readonly problem: EnvelopeProblem
+  /** chi2 without any model: the sum of squares of the whitened data. */
+  readonly dataSquares: number
   chi2: number
   /** d chi2 / d beta */
   gradient: number

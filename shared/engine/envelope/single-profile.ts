@@ -14,6 +14,7 @@ export class SingleProfile implements ChiSquareProfile {
   information = 0
   rawInformation = 0
   scanChi2 = 0
+  dataSquares = 0
   readonly scales = new Float64Array(1)
   readonly slopes = new Float64Array(1)
   private readonly n: number
@@ -23,7 +24,6 @@ export class SingleProfile implements ChiSquareProfile {
   private readonly e: Float64Array
   private readonly f: Float64Array
   private ff = 0
-  private yy = 0
 
   constructor(readonly problem: EnvelopeProblem) {
     this.n = problem.model.lineCount
@@ -37,10 +37,10 @@ export class SingleProfile implements ChiSquareProfile {
   /** Reads intensities and sigmas of the problem again: many tables of the same lines need one profile. */
   load(): void {
     const { model: { amplitude }, intensity, inverseSigma } = this.problem
-    this.yy = 0
+    this.dataSquares = 0
     for (let i = 0; i < this.n; i++) {
       this.y[i] = intensity[i] * inverseSigma[i]
-      this.yy += this.y[i] * this.y[i]
+      this.dataSquares += this.y[i] * this.y[i]
       this.w[i] = amplitude[i] * inverseSigma[i]
     }
   }
@@ -124,7 +124,7 @@ export class SingleProfile implements ChiSquareProfile {
         best = k
       }
     }
-    this.scanChi2 = this.yy - largest
+    this.scanChi2 = this.dataSquares - largest
     return best
   }
 

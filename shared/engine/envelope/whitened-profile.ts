@@ -16,6 +16,7 @@ export class WhitenedProfile implements ChiSquareProfile {
   information = 0
   rawInformation = 0
   scanChi2 = 0
+  readonly dataSquares: number
   readonly scales: Float64Array
   readonly slopes: Float64Array
   private readonly factor: Float64Array
@@ -36,6 +37,7 @@ export class WhitenedProfile implements ChiSquareProfile {
     this.slopes = new Float64Array(problem.bandCount)
     this.shapes = createShapes(n)
     this.data = solveLower(this.factor, n, problem.intensity)
+    this.dataSquares = dot(this.data, this.data)
     this.columns = Array.from({ length: problem.bandCount }, () => new Float64Array(n))
   }
 
