@@ -1,5 +1,5 @@
 import { watchDebounced } from '@vueuse/core'
-import { computed, shallowRef, toValue, type MaybeRefOrGetter } from 'vue'
+import { computed, toValue, type MaybeRefOrGetter } from 'vue'
 import type { RetrievalSettings } from '#shared/schemas/settings'
 import type { LineList } from '#shared/types/line-list'
 import { isComplete, knownAbout, type FileEntry } from '~/utils/submit/entries'
@@ -29,5 +29,5 @@ export function useFilePreview(entry: MaybeRefOrGetter<FileEntry>, settings: May
     else fitting.clear()
   }, { immediate: true, debounce: 150 })
 
-  return { sketch, fit: shallowRef(fitting), complete }
+  return { sketch, fit: fitting, complete }
 }

@@ -45,7 +45,9 @@ export function useLineSwitching(detail: MaybeRefOrGetter<RetrievalDetail | null
   }
   /** What the page shows: the recomputed result over the stored one, with the lines that only stood beside kept as they were. */
   const shown = computed<RetrievalResult | null>(() => (changed.value && fit.value.value) || stored.value)
+  /** The lines of the stored choice and those switched on beyond it. */
+  const main = computed(() => lines.value.filter(line => line.used || on.value.has(lineKey(line))))
   const labels = computed(() => lines.value.filter(line => on.value.has(lineKey(line))).map(line => line.label))
   const problem = computed(() => fit.problem.value ?? (listError.value ? 'The line list could not be loaded; the numbers stay as stored.' : null))
-  return { lines, on, turn, changed, shown, labels, busy: fit.busy, problem, reset: () => { on.value = storedOn.value } }
+  return { lines, main, on, turn, changed, shown, labels, busy: fit.busy, problem, reset: () => { on.value = storedOn.value } }
 }

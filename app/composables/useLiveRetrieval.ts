@@ -6,7 +6,8 @@ const moving = (phase: string | undefined) => phase === 'QUEUED' || phase === 'E
 
 /** One retrieval that moves to its result by itself: the stream says that something happened, the detail says what. */
 export async function useLiveRetrieval(id: string) {
-  const { data: detail, error, refresh } = await useRetrievalDetail(id)
+  const asked = useRetrievalDetail(id)
+  const { data: detail, error, refresh } = asked
   const pictureId = computed(() => (detail.value?.spectrum && detail.value.result ? id : null))
   const { data: picture, error: pictureError, refresh: refreshPicture } = usePicture(pictureId)
 
@@ -26,5 +27,7 @@ export async function useLiveRetrieval(id: string) {
       return !moving(detail.value?.phase)
     },
   })
+  // Last: after an await nothing may be hung on the page any more.
+  await asked
   return { detail, picture, pictureError, error, reload, waiting: computed(() => state.value === 'waiting') }
 }

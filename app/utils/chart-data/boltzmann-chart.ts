@@ -15,12 +15,12 @@ function pointLooks(tokens: ChartTokens, band: number, isHot: IsHot) {
   const keyOf = (point: Mark | undefined) => (point ? lineKey(point) : '')
   return {
     pointStyle: (context: ScriptableContext<'scatter'>) => pointOf(context)?.atEdge ? 'triangle' : markers[band % markers.length],
-    pointRotation: (context: ScriptableContext<'scatter'>) => pointOf(context)?.atEdge ? 180 : 0,
-    pointRadius: (context: ScriptableContext<'scatter'>) => isHot(keyOf(pointOf(context))) ? 8 : 5.5,
-    pointHoverRadius: 8,
-    pointBorderWidth: 2,
-    pointBorderColor: (context: ScriptableContext<'scatter'>) => pointOf(context)?.used === false ? tokens.inkMuted : colour,
-    pointBackgroundColor: (context: ScriptableContext<'scatter'>) => {
+    rotation: (context: ScriptableContext<'scatter'>) => pointOf(context)?.atEdge ? 180 : 0,
+    radius: (context: ScriptableContext<'scatter'>) => isHot(keyOf(pointOf(context))) ? 8 : 5.5,
+    hoverRadius: 8,
+    borderWidth: 2,
+    borderColor: (context: ScriptableContext<'scatter'>) => pointOf(context)?.used === false ? tokens.inkMuted : colour,
+    backgroundColor: (context: ScriptableContext<'scatter'>) => {
       const point = pointOf(context)
       return !point || point.hollow || !point.used ? tokens.surface : colour
     },

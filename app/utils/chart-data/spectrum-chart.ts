@@ -1,6 +1,7 @@
 import type { ChartData, ChartOptions } from 'chart.js'
 import type { ChartTokens } from '~/composables/useChartTokens'
 import { chartOptions } from '~/utils/chart-options'
+import { superscript } from './power'
 import type { SpectrumSeries } from './spectrum'
 
 /** Observed, model and continuum above; observed minus model in a strip below, on the same wavelengths. */
@@ -17,12 +18,15 @@ export function spectrumChartData({ data, model, continuum, residual }: Spectrum
   }
 }
 
-export interface SpectrumChartWords { range: [number, number] | null, axisTitle: string, valueTitle: string, /** A strip of residuals below. */ strip: boolean }
+export interface SpectrumChartWords { range: [number, number] | null, axisTitle: string, valueTitle: string, /** A strip of residuals below. */ strip: boolean, /** Power of ten taken out of the values. */ power: number }
 
-export function spectrumChartOptions(tokens: ChartTokens, { range, axisTitle, valueTitle, strip }: SpectrumChartWords, onPoint: (x: number) => void): ChartOptions<'line'> {
-  const base = chartOptions(tokens, { x: axisTitle, y: valueTitle }) as ChartOptions<'line'>
-  const scale = base.scales?.y
-  const residual = { ...scale, stack: 'spectrum', stackWeight: 1, weight: 0, title: { ...scale?.title, text: 'residual' }, ticks: { ...scale?.ticks, maxTicksLimit: 3 } }
+export function spectrumChartOptions(tokens: ChartTokens, { range, axisTitle, valueTitle, strip, power }: SpectrumChartWords, onPoint: (x: number) => void): ChartOptions<'line'> {
+  const base = chartOptions(tokens, { x: axisTitle, y: power ? `${valueTitle} × 10${superscript(-power)}` : valueTitle }) as ChartOptions<'line'>
+  const divisor = 10 ** power
+  const scale = { ...base.scales?.y, ticks: { ...base.scales?.y?.ticks, callback: (value: number | string) => String(Number((Number(value) / divisor).toPrecision(6))) } }
+  const plainTicks = { ...base.scales?.x?.ticks, format: { useGrouping: false } }
+  // Its name begins with r, which would make it a radial axis if nothing else were said.
+  const residual = { ...scale, axis: 'y' as const, position: 'left' as const, stack: 'spectrum', stackWeight: 1, weight: 0, title: { ...scale?.title, text: 'residual' }, ticks: { ...scale?.ticks, maxTicksLimit: 3 } }
   return {
     ...base,
     parsing: false,
@@ -32,9 +36,9 @@ export function spectrumChartOptions(tokens: ChartTokens, { range, axisTitle, va
       if (x !== undefined) onPoint(x)
     },
     scales: {
-      x: { ...base.scales?.x, ...(range ? { min: range[0], max: range[1] } : {}) } as NonNullable<typeof scale>,
-      y: { ...scale, stack: 'spectrum', stackWeight: 4, weight: 1, grace: '14%' } as NonNullable<typeof scale>,
-      ...(strip ? { residual: residual as NonNullable<typeof scale> } : {}),
+      x: { ...base.scales?.x, ticks: plainTicks, ...(range ? { min: range[0], max: range[1] } : {}) } as object,
+      y: { ...scale, axis: 'y' as const, position: 'left' as const, stack: 'spectrum', stackWeight: 4, weight: 1, grace: '14%' } as object,
+      ...(strip ? { residual: residual as object } : {}),
     },
     plugins: { ...base.plugins, tooltip: { enabled: false }, zoom: { ...base.plugins?.zoom, pan: { ...base.plugins?.zoom?.pan, mode: 'x' }, zoom: { ...base.plugins?.zoom?.zoom, mode: 'x' } } },
   }

@@ -5,17 +5,20 @@ import { quantityWords, signed } from './number-words'
 
 export interface LineRow { key: string, label: string, band: string, energy: string, intensity: string, sigma: string, residual: string, without: string, reason: string | null, measured: boolean }
 
-/** Lines as the table prints them; `uNoise` gives the decimals of the temperatures. */
-export function lineRows(lines: ResultLine[], uNoise: number | null): LineRow[] {
+/** Lines as the table prints them; `uNoise` gives the decimals of the temperatures, `power` is the power of ten taken out of the intensities. */
+export function lineRows(lines: ResultLine[], uNoise: number | null, power = 0): LineRow[] {
+  const scale = 10 ** power
+  const sigmaOf = ({ sigma }: ResultLine) => (sigma === null ? null : sigma / scale)
   return lines.map((line) => {
+    const sigma = sigmaOf(line)
     const measured = line.sigma !== null || line.intensity !== 0
     return {
       key: lineKey(line),
       label: line.label,
       band: line.band,
       energy: line.termEnergy.toFixed(2),
-      intensity: measured ? quantityWords(line.intensity, line.sigma) : '–',
-      sigma: line.sigma === null ? '–' : quantityWords(line.sigma, line.sigma),
+      intensity: measured ? quantityWords(line.intensity / scale, sigma) : '–',
+      sigma: sigma === null ? '–' : quantityWords(sigma, sigma),
       residual: line.residual === null ? '–' : signed(line.residual, 1),
       without: line.temperatureWithout === null ? '–' : line.temperatureWithout.toFixed(decimalsFor(uNoise)),
       reason: line.reason ?? null,

@@ -10,7 +10,15 @@ export const airFormulaNames: Record<AirFormula, string> = {
 }
 export const airFormulaOptions = airFormulas.map(value => ({ value, label: airFormulaNames[value] }))
 
-const short = (value: number) => Number(value.toPrecision(6)).toString()
+const scales = [{ unit: 'm', nanometres: 1e9 }, { unit: 'mm', nanometres: 1e6 }, { unit: 'µm', nanometres: 1e4, per: 1e3 }, { unit: 'nm', nanometres: 0, per: 1 }]
+
+/** Two wavelengths in the unit that suits them. */
+function wavelengthRange(ends: number[]): string {
+  const [from, to] = ends.sort((a, b) => a - b) as [number, number]
+  const { unit, nanometres, per = nanometres } = scales.find(scale => to >= scale.nanometres)!
+  const short = (value: number) => Number((value / per).toPrecision(5)).toString()
+  return `${short(from)}–${short(to)} ${unit}`
+}
 
 /** What the ends of an axis would be in vacuum nanometres under each unit, so that the right one is seen at a glance. */
 export function unitOptions(from: number, to: number): { value: AxisUnit, label: string, hint: string }[] {
@@ -18,7 +26,7 @@ export function unitOptions(from: number, to: number): { value: AxisUnit, label:
     const hint = unit === 'pixel'
       ? 'no wavelength: cannot be fitted'
       : unit !== 'nm' && (isWavelengthUnit(unit) || isFrequencyUnit(unit)) && from > 0 && to > 0
-        ? `${[from, to].map(x => short(pointToVacuumNanometre(x, unit, 'vacuum', 'ciddor1996'))).sort((a, b) => Number(a) - Number(b)).join('–')} nm`
+        ? wavelengthRange([from, to].map(x => pointToVacuumNanometre(x, unit, 'vacuum', 'ciddor1996')))
         : ''
     return { value: unit, label: unitNames[unit], hint }
   })
