@@ -65,6 +65,6 @@ export function boltzmannChartOptions(series: BoltzmannSeries, tokens: ChartToke
     },
     interaction: { mode: 'nearest', intersect: true },
     scales: { x: { ...base.scales?.x, grace: '6%' } as object, y: { ...base.scales?.y, grace: '8%' } as object },
-    plugins: { ...base.plugins, tooltip: { enabled: false }, annotation: { annotations: Object.fromEntries([...edge, ...labelAnnotations(points, tokens, isHot)]) } },
+    plugins: { ...base.plugins, tooltip: { enabled: false }, annotation: { clip: false, annotations: Object.fromEntries([...edge, ...labelAnnotations(points, tokens, isHot)]) } },
   }
 }

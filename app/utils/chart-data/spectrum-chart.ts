@@ -24,7 +24,9 @@ export function spectrumChartOptions(tokens: ChartTokens, { range, axisTitle, va
   const base = chartOptions(tokens, { x: axisTitle, y: power ? `${valueTitle} × 10${superscript(-power)}` : valueTitle }) as ChartOptions<'line'>
   const divisor = 10 ** power
   const scale = { ...base.scales?.y, ticks: { ...base.scales?.y?.ticks, callback: (value: number | string) => String(Number((Number(value) / divisor).toPrecision(6))) } }
-  const plainTicks = { ...base.scales?.x?.ticks, format: { useGrouping: false } }
+  const plainTicks = { ...base.scales?.x?.ticks, includeBounds: false, format: { useGrouping: false } }
+  // The lowest tick would touch the highest of the strip below.
+  const above = { ...scale.ticks, callback: (value: number | string, index: number) => (strip && index === 0 ? '' : scale.ticks.callback(value)) }
   // Its name begins with r, which would make it a radial axis if nothing else were said.
   const residual = { ...scale, axis: 'y' as const, position: 'left' as const, stack: 'spectrum', stackWeight: 1, weight: 0, title: { ...scale?.title, text: 'residual' }, ticks: { ...scale?.ticks, maxTicksLimit: 3 } }
   return {
@@ -37,7 +39,7 @@ export function spectrumChartOptions(tokens: ChartTokens, { range, axisTitle, va
     },
     scales: {
       x: { ...base.scales?.x, ticks: plainTicks, ...(range ? { min: range[0], max: range[1] } : {}) } as object,
-      y: { ...scale, axis: 'y' as const, position: 'left' as const, stack: 'spectrum', stackWeight: 4, weight: 1, grace: '14%' } as object,
+      y: { ...scale, ticks: above, axis: 'y' as const, position: 'left' as const, stack: 'spectrum', stackWeight: 4, weight: 1, grace: '14%' } as object,
       ...(strip ? { residual: residual as object } : {}),
     },
     plugins: { ...base.plugins, tooltip: { enabled: false }, zoom: { ...base.plugins?.zoom, pan: { ...base.plugins?.zoom?.pan, mode: 'x' }, zoom: { ...base.plugins?.zoom?.zoom, mode: 'x' } } },

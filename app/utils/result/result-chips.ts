@@ -11,7 +11,7 @@ export function resultChips(result: Pick<RetrievalResult, 'lines' | 'leverArm' |
   const used = result.lines.filter(line => line.used).length
   const lever = result.leverArm === null ? '' : `, lever arm ${result.leverArm.toFixed(1)}`
   const told: Chip[] = [{ words: `${plural(used, 'line')}${lever}`, warns: false }]
-  if (result.pValue !== null) told.push({ words: probability(result.pValue), warns: result.flags.includes('poor-fit') })
+  if (result.pValue !== null) told.push({ words: probability(result.pValue), warns: false })
   if (result.curvatureZ !== null && !result.flags.includes('curved')) told.push({ words: `no curvature (z = ${result.curvatureZ.toFixed(1).replace('-', '−')})`, warns: false })
   return [...told, ...result.flags.map(flag => ({ words: flagWords[flag], warns: true }))]
 }
