@@ -106,7 +106,7 @@ describe('the start and stop scripts, beside the stack of the other tests', () =
   it('say in one sentence what to install when a server is missing and only root could install it', async () => {
     // A PATH on which everything but MariaDB's client is found, and an `id` that tells of a user without rights.
     const path = mkdtempSync(join(tmpdir(), 'trotline-path-'))
-    for (const tool of ['bash', 'dirname', 'mkdir', 'flock', 'date', 'node', 'npm', 'cat', 'awk', 'curl', 'redis-server'])
+    for (const tool of ['bash', 'dirname', 'mkdir', 'flock', 'date', 'node', 'npm', 'cat', 'awk', 'curl', 'redis-server', 'sha256sum', 'cut'])
       symlinkSync((await run('which', [tool])).stdout.trim(), join(path, tool))
     writeFileSync(join(path, 'id'), '#!/bin/bash\necho 1000\n', { mode: 0o755 })
     const { code, output } = await script('start.sh', ['--no-demo'], { PATH: path })
