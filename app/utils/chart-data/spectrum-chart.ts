@@ -28,7 +28,7 @@ export function spectrumChartOptions(tokens: ChartTokens, { range, axisTitle, va
   // The lowest tick would touch the highest of the strip below.
   const above = { ...scale.ticks, callback: (value: number | string, index: number) => (strip && index === 0 ? '' : scale.ticks.callback(value)) }
   // Its name begins with r, which would make it a radial axis if nothing else were said.
-  const residual = { ...scale, axis: 'y' as const, position: 'left' as const, stack: 'spectrum', stackWeight: 1, weight: 0, title: { ...scale?.title, text: 'residual' }, ticks: { ...scale?.ticks, maxTicksLimit: 3 } }
+  const residual = { ...scale, axis: 'y' as const, position: 'left' as const, stack: 'spectrum', stackWeight: 1, weight: 0, title: { display: true, color: tokens.inkMuted, font: { family: '"Atkinson Mono", monospace', size: 12 }, text: 'residual' }, ticks: { ...scale?.ticks, maxTicksLimit: 3 } }
   return {
     ...base,
     parsing: false,
