@@ -31,6 +31,7 @@ const strengthSets = [
     title: 'Honl-London factors, nu^3, no Herman-Wallis correction',
     citation: 'Two-by-two Hund case (a) Hamiltonian per v; closed formulas of Hill & Van Vleck and of Kovacs 1969 (named from memory)',
     absolute: false,
+    comparisonOnly: true,
     note: 'Neglects the coupling of rotation and vibration: P1(2)-P1(5) at 190 K read 2 to 20 K too warm. For comparison only.',
   },
 ]

@@ -72,6 +72,8 @@ export type Interval = [low: number | null, high: number | null]
 /** The other strength sets of a line list: einsteinA by [line][component], in the order of the lines given; null where the set lacks the line. */
 export interface AlternativeStrengths {
   name: string
+  /** Known to be incomplete: its T is shown, and is no part of the spread over the sets. */
+  comparisonOnly?: boolean
   einsteinA: (number[] | null)[]
 }
 
@@ -183,7 +185,7 @@ export interface RetrievalResult {
   bandAgreement?: { chi2: number, dof: number, pValue: number }
   flags: FlagName[]
   cautions: string[]
-  strengthSets: { name: string, temperature: number | null, uNoise: number | null }[]
+  strengthSets: { name: string, temperature: number | null, uNoise: number | null, comparisonOnly?: boolean }[]
   components: UncertaintyComponent[]
   /** Present when the lines were measured in a spectrum. */
   spectrum?: SpectrumMeasurementSummary

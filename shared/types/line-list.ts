@@ -5,6 +5,8 @@ export interface LineListStrengthSet {
   citation: string
   /** False: only ratios within one band (or one upper vibrational level) mean anything. */
   absolute: boolean
+  /** Known to be incomplete: shown beside the others, and no part of their spread. */
+  comparisonOnly?: boolean
   note?: string
 }
 

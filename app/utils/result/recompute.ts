@@ -46,7 +46,7 @@ function fromMeasurement({ settings, result }: Source, list: LineList, on: Reado
     temperatureRange: settings.temperatureRange,
     bandScales: settings.bandScales,
     strengthSet: set,
-    alternatives: alternativeSets(list, used, set).map(name => ({ name, einsteinA: stored.map(({ chosen }) => strengthsOf(chosen.line, name)) })),
+    alternatives: alternativeSets(list, used, set).map(other => ({ ...other, einsteinA: stored.map(({ chosen }) => strengthsOf(chosen.line, other.name)) })),
     priorFlags: measurement.flags,
     cautions: result.cautions,
   }

@@ -65,7 +65,7 @@ export const resultSchema = z.looseObject({
   lines: z.array(resultLineSchema),
   flags: z.array(z.enum(flagNames)),
   cautions: z.array(z.string()),
-  strengthSets: z.array(z.object({ name: z.string(), temperature: number, uNoise: number })),
+  strengthSets: z.array(z.object({ name: z.string(), temperature: number, uNoise: number, comparisonOnly: z.boolean().optional() })),
   components: z.array(z.object({ name: z.string(), kelvin: z.number(), commonTo: z.enum(['line', 'band', 'instrument', 'campaign', 'all']) })),
 })
 
@@ -86,7 +86,7 @@ export const retrievalDetailSchema = retrievalRowSchema.extend({
   spectrum: z.object({ id: z.string(), name: z.string(), sha256: z.string(), format: z.string(), pixelCount: z.int(), about: spectrumAboutSchema, missing: z.array(z.string()) }).nullable(),
   result: resultSchema.nullable(),
   provenance: provenanceSchema.nullable(),
-  revisions: z.array(z.object({ revision: z.int(), phase, createdAt: time, createdBy: z.string(), note: z.string(), temperature: number, uNoise: number })),
+  revisions: z.array(z.object({ revision: z.int(), phase, createdAt: time, createdBy: z.string(), note: z.string(), temperature: number, uNoise: number, comparisonOnly: z.boolean().optional() })),
   reviews: z.array(z.object({ revision: z.int(), verdict, note: z.string(), reviewer: z.string(), createdAt: time })),
   may: z.object({ abort: z.boolean(), revise: z.boolean(), review: z.boolean(), submit: z.boolean() }),
   role: z.enum(campaignRoles),

@@ -16,7 +16,7 @@ export function strengthSetTemperatures(fitted: TableFit, name: string, alternat
   const others = alternatives.filter(set => set.name !== name).map((set) => {
     const table = withStrengths(fitted.table, used.map(i => set.einsteinA[i] ?? null))
     const other = table && fitTable(table)
-    return { name: set.name, temperature: other?.temperature ?? null, uNoise: other?.uTemperature ?? null }
+    return { name: set.name, temperature: other?.temperature ?? null, uNoise: other?.uTemperature ?? null, ...(set.comparisonOnly ? { comparisonOnly: true } : {}) }
   })
   return [own, ...others]
 }
@@ -34,18 +34,18 @@ function withStrengths(table: LineTable, strengths: readonly (number[] | null)[]
   return { ...table, lines }
 }
 
-/** Systematic part from the choice of strength set: the standard deviation (n - 1) of T over the complete sets; null for one set. */
+/** Systematic part from the choice of strength set: the standard deviation (n - 1) of T over the complete sets, those for comparison only left out; null for one set. */
 export function strengthSetComponent(sets: StrengthSets): UncertaintyComponent | null {
-  const values = sets.flatMap(set => set.temperature ?? [])
+  const values = sets.flatMap(set => set.comparisonOnly ? [] : set.temperature ?? [])
   if (values.length < 2) return null
   const mean = values.reduce((a, b) => a + b, 0) / values.length
   const squares = values.reduce((a, b) => a + (b - mean) ** 2, 0)
   return { name: 'strength set', kelvin: Math.sqrt(squares / (values.length - 1)), commonTo: 'all' }
 }
 
-/** Largest distance of another set's T from the one in use, K. */
+/** Largest distance of another set's T from the one in use, K; sets for comparison only do not count. */
 export function strengthSetDistance(sets: StrengthSets): number {
   const own = sets[0]?.temperature
   if (own === null || own === undefined) return 0
-  return sets.reduce((largest, { temperature }) => temperature === null ? largest : Math.max(largest, Math.abs(temperature - own)), 0)
+  return sets.reduce((largest, { temperature, comparisonOnly }) => temperature === null || comparisonOnly ? largest : Math.max(largest, Math.abs(temperature - own)), 0)
 }

@@ -86,9 +86,9 @@ function build(source: Source, list: LineList, chosen: ChosenLine[], set: string
     temperatureRange: settings.temperatureRange,
     bandScales: settings.bandScales,
     strengthSet: set,
-    alternatives: alternativeSets(list, chosen, set).map(name => ({
-      name,
-      einsteinA: [...chosen.map(({ line }) => strengthsOf(line, name)), ...nuisanceLines.map(() => null)],
+    alternatives: alternativeSets(list, chosen, set).map(other => ({
+      ...other,
+      einsteinA: [...chosen.map(({ line }) => strengthsOf(line, other.name)), ...nuisanceLines.map(() => null)],
     })),
     cautions: cautionsFor(list, chosen, set, chosen.length, bands),
   }

@@ -87,7 +87,7 @@ function listInput(source: Source & { lineList: LineList }, reading: ObservableR
   const choice = chooseStrengthSet(lineList, chosen, table.strengthSet ?? settings.strengthSet)
   if ('message' in choice) return { problem: [{ path: 'strengthSet', message: choice.message }] }
   const lines = chosen.map((line, i) => ({ ...modelLine(line, choice.set), ...measured(table.lines[i]), used: isUsed(table.lines[i], source) }))
-  const alternatives = alternativeSets(lineList, chosen, choice.set).map(name => ({ name, einsteinA: chosen.map(({ line }) => strengthsOf(line, name)) }))
+  const alternatives = alternativeSets(lineList, chosen, choice.set).map(other => ({ ...other, einsteinA: chosen.map(({ line }) => strengthsOf(line, other.name)) }))
   return { input: common(source, reading, noise, lines, choice.set, chosen, alternatives) }
 }
 

@@ -1,5 +1,5 @@
 import type { ModelLine } from '../../engine/types'
-import type { LineList, LineListBand, LineListLine } from '../../types/line-list'
+import type { LineList, LineListBand, LineListLine, LineListStrengthSet } from '../../types/line-list'
 
 /** A line of a list with the band it belongs to and the name it goes by in this retrieval. */
 export interface ChosenLine { band: LineListBand, line: LineListLine, label: string }
@@ -41,6 +41,8 @@ export function chooseStrengthSet(list: LineList, chosen: readonly ChosenLine[],
 }
 
 /** The list's other sets that have every chosen line, for the comparison beside the result. */
-export function alternativeSets(list: LineList, chosen: readonly ChosenLine[], used: string): string[] {
-  return list.strengthSets.map(set => set.name).filter(name => name !== used && chosen.every(({ line }) => strengthsOf(line, name) !== null))
+export function alternativeSets(list: LineList, chosen: readonly ChosenLine[], used: string): Pick<LineListStrengthSet, 'name' | 'comparisonOnly'>[] {
+  return list.strengthSets
+    .filter(({ name }) => name !== used && chosen.every(({ line }) => strengthsOf(line, name) !== null))
+    .map(({ name, comparisonOnly }) => ({ name, ...(comparisonOnly ? { comparisonOnly } : {}) }))
 }
