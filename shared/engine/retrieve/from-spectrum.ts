@@ -45,7 +45,7 @@ function intensityCovariance({ set, rejected }: Measurement, factors: number[]):
 /** The other strength sets in the order of the lines that go on; lines that share an area have none. */
 function reorder(alternatives: AlternativeStrengths[] | undefined, given: ModelLine[], lines: ModelLine[]): AlternativeStrengths[] | undefined {
   const places = lines.map(line => given.findIndex(one => one.label === line.label && one.band === line.band))
-  return alternatives?.map(({ name, einsteinA }) => ({ name, einsteinA: places.map(place => place === -1 ? null : einsteinA[place] ?? null) }))
+  return alternatives?.map(set => ({ ...set, einsteinA: places.map(place => place === -1 ? null : set.einsteinA[place] ?? null) }))
 }
 
 function lineInput(input: SpectrumRetrievalInput, measurement: Measurement): LineRetrievalInput {

@@ -11,7 +11,12 @@ export function lineDistance(a: ModelLine, b: ModelLine): number {
   return least
 }
 
-const merged = (a: ModelLine, b: ModelLine): ModelLine => ({ label: `${a.label} + ${b.label}`, band: a.band, components: [...a.components, ...b.components] })
+/** One area for both. Lines of two bands make a band of their own: no scale of either speaks for them. */
+const merged = (a: ModelLine, b: ModelLine): ModelLine => ({
+  label: `${a.label} + ${b.label}`,
+  band: a.band === b.band ? a.band : `${a.band} + ${b.band}`,
+  components: [...a.components, ...b.components],
+})
 
 /**
  * Chooses the lines whose areas are measured: every used line by itself, and the others around them. Of the others, one that stands within half a
