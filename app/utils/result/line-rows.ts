@@ -8,10 +8,11 @@ export interface LineRow { key: string, label: string, band: string, energy: str
 /** Lines as the table prints them; `uNoise` gives the decimals of the temperatures, `power` is the power of ten taken out of the intensities. */
 export function lineRows(lines: ResultLine[], uNoise: number | null, power = 0): LineRow[] {
   const scale = 10 ** power
-  const sigmaOf = ({ sigma }: ResultLine) => (sigma === null ? null : sigma / scale)
+  // A line that was never measured has no uncertainty, or one of zero.
+  const sigmaOf = ({ sigma }: ResultLine) => (sigma ? sigma / scale : null)
   return lines.map((line) => {
     const sigma = sigmaOf(line)
-    const measured = line.sigma !== null || line.intensity !== 0
+    const measured = sigma !== null || line.intensity !== 0
     return {
       key: lineKey(line),
       label: line.label,
