@@ -22,7 +22,7 @@ export const flagWords: Record<FlagName, string> = {
   'few-lines': 'fewer than three lines were used',
   'no-test': 'as many unknowns as lines: the fit cannot be tested',
   'short-lever': 'the line energies span less than kT',
-  'weak-line': 'the weakest line is below signal-to-noise 20: the Boltzmann plot is biased',
+  'weak-line': 'a used line is below signal-to-noise 20: the Boltzmann plot beside the result is biased, the temperature is not',
   'poor-fit': 'the lines do not fit one temperature within their noise',
   'curved': 'the populations are curved: no single temperature describes them',
   'tau-uncorrected': 'lines are optically thick and not corrected',

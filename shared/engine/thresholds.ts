@@ -4,7 +4,7 @@
 export const fewLines = 3
 /** `short-lever`: C2 (E_max - E_min) / T below this. */
 export const shortLever = 1
-/** `weak-line`: signal-to-noise of the weakest used line below this, where a log fit is shown. */
+/** `weak-line`: signal-to-noise of the weakest used line below this: the log fit of the Boltzmann plot is biased there. */
 export const weakLineSignalToNoise = 20
 /** `poor-fit`: p value of chi2 below this. */
 export const poorFitProbability = 1e-3

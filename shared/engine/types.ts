@@ -52,6 +52,8 @@ export interface ModelLine {
   /** Lines of one band share a scale. */
   band: string
   components: LineComponent[]
+  /** Lines of several bands share this one area: it has no place on a Boltzmann plot and no model. */
+  mixesBands?: boolean
 }
 
 /** A line with its measured intensity. `sigma` null: not known, see `NoiseKind`. */

@@ -7,7 +7,7 @@ export function resultFlags(result: Omit<RetrievalResult, 'flags'>, temperature:
   const raised: [FlagName, boolean][] = [
     ['no-test', result.dof === 0],
     ['short-lever', result.leverArm !== null && result.leverArm < shortLever],
-    ['weak-line', hasLogFit(result) && result.weakestSignalToNoise !== null && result.weakestSignalToNoise < weakLineSignalToNoise],
+    ['weak-line', result.weakestSignalToNoise !== null && result.weakestSignalToNoise < weakLineSignalToNoise],
     ['poor-fit', result.pValue !== null && result.pValue < poorFitProbability],
     ['curved', result.curvatureZ !== null && Math.abs(result.curvatureZ) > curvedZ],
     ['edge-of-range', temperature.value < range[0] * (1 + edgeFraction) || temperature.value > range[1] * (1 - edgeFraction)],
@@ -15,8 +15,4 @@ export function resultFlags(result: Omit<RetrievalResult, 'flags'>, temperature:
     ['strength-sets-disagree', strengthSetDistance(result.strengthSets) > strengthSetNoise * temperature.uNoise],
   ]
   return raised.flatMap(([flag, is]) => is ? flag : [])
-}
-
-function hasLogFit(result: Omit<RetrievalResult, 'flags'>): boolean {
-  return result.crossChecks.some(check => check.method === 'boltzmann-plot' && check.temperature !== null)
 }

@@ -50,7 +50,7 @@ function sigmaOfLine(input: LineRetrievalInput, i: number, model: FittedModel | 
 
 /** sigma and the Boltzmann plot's ordinate. */
 function noiseAndPlot(line: MeasuredLine, sigma: number | null, reading: ObservableReading, model: FittedModel | null): Pick<ResultLine, 'sigma' | 'logRatio' | 'sigmaLogRatio'> {
-  const logRatio = finiteOrNull(Math.log(line.intensity / plotStrength(line, reading, model?.beta ?? 0)))
+  const logRatio = line.mixesBands ? null : finiteOrNull(Math.log(line.intensity / plotStrength(line, reading, model?.beta ?? 0)))
   return { sigma, logRatio, sigmaLogRatio: logRatio === null || sigma === null ? null : finiteOrNull(sigma / line.intensity) }
 }
 
@@ -66,6 +66,6 @@ export function plotStrength(line: MeasuredLine, reading: ObservableReading, bet
 
 function modelValue(line: MeasuredLine, reading: ObservableReading, model: FittedModel): number | null {
   const scale = model.scaleOf(line.band)
-  if (scale === undefined || !(lineStrength(line, reading).strength > 0)) return null
+  if (line.mixesBands || scale === undefined || !(lineStrength(line, reading).strength > 0)) return null
   return finiteOrNull(scale * lineValue(line, reading, model.beta, model.referenceEnergy).value)
 }

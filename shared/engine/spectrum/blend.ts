@@ -15,7 +15,7 @@ function bandScales(measurement: Measurement, weightOf: (line: ModelLine) => num
   const { areas, covariance } = measurement.set
   measurement.lines.forEach((line, i) => {
     const sigma = Math.sqrt(covariance[i * areas.length + i])
-    if (!(areas[i] > bandSignal * sigma)) return
+    if (line.mixesBands || !(areas[i] > bandSignal * sigma)) return
     const weight = weightOf(line)
     const [above, below] = sums.get(line.band) ?? [0, 0]
     sums.set(line.band, [above + areas[i] * weight, below + weight * weight])

@@ -16,6 +16,7 @@ const merged = (a: ModelLine, b: ModelLine): ModelLine => ({
   label: `${a.label} + ${b.label}`,
   band: a.band === b.band ? a.band : `${a.band} + ${b.band}`,
   components: [...a.components, ...b.components],
+  ...(a.band === b.band && !a.mixesBands ? {} : { mixesBands: true }),
 })
 
 /**

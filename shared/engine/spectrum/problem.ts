@@ -106,3 +106,10 @@ export function layOutProblem(input: SpectrumRetrievalInput, used: ModelLine[], 
     window,
   }
 }
+
+/** The problem of a fit that was made: these lines (one area each) over all usable pixels of the window, nm. */
+export function restoreProblem(input: SpectrumRetrievalInput, lines: ModelLine[], window: [number, number], integrated: boolean): FitProblem {
+  const pixels = pixelsWithin(input.spectrum, window[0], window[1], input.masks)
+  const weighted = weightedLines(lines, input)
+  return { lines, used: lines.map(() => true), weighted, pixels, system: systemFor(pixels, weighted, window, input.continuumOrder, integrated), rejected: [], window }
+}

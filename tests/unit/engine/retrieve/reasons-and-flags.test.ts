@@ -73,6 +73,13 @@ describe('flags', () => {
     expect(flagsOf(input)).toContain(flag)
   })
 
+  it('call lines weak also where they are too weak for a Boltzmann plot at all', () => {
+    const result = retrieveFromLines(change(table(6), line => ({ sigma: line.intensity })))
+    expect(result.temperature).not.toBeNull()
+    expect(result.crossChecks.find(check => check.method === 'boltzmann-plot')?.temperature).toBeNull()
+    expect(result.flags).toContain('weak-line')
+  })
+
   it('do not call a line rejected that was only measured', () => {
     expect(flagsOf(change(table(7), (_, i) => i === 0 ? { used: false } : {}))).not.toContain('line-rejected')
   })
