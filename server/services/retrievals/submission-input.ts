@@ -4,6 +4,7 @@ import type { LineTable } from '#shared/schemas/line-table'
 import type { FieldProblem } from '#shared/types/error-codes'
 import { DomainError } from '#shared/utils/domain-error'
 import { prepareFromTable } from '#shared/utils/retrieval/from-table'
+import { config } from '../../config'
 import { findInstrumentId, findStationId } from '../../database/retrievals/places'
 import { database } from '../../database/client'
 import { findSpectraForSubmission } from '../../database/retrievals/read'
@@ -24,6 +25,7 @@ export interface SubmittedInput {
 
 /** Finds and checks what was submitted, in the order given. Refuses what the engine could only refuse later. */
 export async function inputsOf(campaignId: string, body: SubmitRetrievals, settings: RetrievalSettings): Promise<SubmittedInput[]> {
+  refuseTooMany(body)
   if (body.lineTable) return [await tableInput(campaignId, body.lineTable, settings)]
   const problems = checkSettings(settings, settings.lineList === null ? null : await getLineList(settings.lineList))
   if (settings.lineList === null) problems.push({ path: 'settings.lineList', message: 'A spectrum needs a line list: name one in the settings or choose a recipe that does.' })
@@ -53,6 +55,13 @@ async function spectrumInputs(campaignId: string, ids: string[], settings: Retri
     const row = found.get(id)
     return row ? [{ ...row, spectrumId: id, lineTable: null, band: bandOf(settings) }] : []
   })
+}
+
+/** The service may take less than the format allows. */
+function refuseTooMany({ lineTable, spectrumIds }: SubmitRetrievals): void {
+  const { tableLines, spectra } = config().limits
+  if (lineTable && lineTable.lines.length > tableLines) throw new DomainError('too_many', `A table takes at most ${tableLines} lines here; this one has ${lineTable.lines.length}.`, [{ path: 'lineTable.lines', message: `At most ${tableLines} lines.` }])
+  if (spectrumIds && spectrumIds.length > spectra) throw new DomainError('too_many', `One request takes at most ${spectra} spectra here; send the rest in another.`, [{ path: 'spectrumIds', message: `At most ${spectra} spectra.` }])
 }
 
 const bandOf = ({ bands }: RetrievalSettings): string | null => bands.length > 0 ? bands.join('+').slice(0, 64) : null

@@ -3,6 +3,7 @@ import { readFile } from 'node:fs/promises'
 import { setImmediate as breathe } from 'node:timers/promises'
 import type { UploadItem } from '#shared/schemas/spectrum-view'
 import type { SpectrumAbout } from '#shared/types/spectrum'
+import { config } from '../../config'
 import { database } from '../../database/client'
 import { isDuplicateEntry } from '../../database/duplicate'
 import { newId } from '../../database/ids'
@@ -47,6 +48,8 @@ async function storeOne(target: Target, file: Incoming): Promise<UploadItem> {
   const outcome = readUpload(file.bytes, file.name, target.about, target.place.instrument)
   if (!outcome.ok) return { name: file.name, ok: false, missing: [], warnings: [], error: outcome.error }
   const { spectrum, about, missing } = outcome
+  const most = config().limits.pixels
+  if (spectrum.axis.length > most) return { name: file.name, ok: false, missing: [], warnings: [], error: { code: 'too_many_pixels', message: `A spectrum takes at most ${most} pixels here; this one has ${spectrum.axis.length}. Cut it to the range of the lines, or bin it.` } }
   const known = await findSpectrumBySha(database(), target.campaignId, file.sha256)
   if (known) return asKnown(target, file, known, { about, missing, ...wavelengthRange(spectrum, about) })
   await file.keep()
