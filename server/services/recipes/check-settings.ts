@@ -4,11 +4,16 @@ import type { LineList, LineListBand } from '#shared/types/line-list'
 
 /** Does the recipe name only what its line list has? The paths are those of the recipe's form. */
 export function checkSettings(settings: RetrievalSettings, list: LineList | null): FieldProblem[] {
-  if (settings.lineList === null) return withoutList(settings)
+  if (settings.lineList === null) return [...unavailableMethod(settings), ...withoutList(settings)]
   if (list === null) return [{ path: 'settings.lineList', message: `There is no line list ${settings.lineList}.` }]
   const bands = settings.bands.length > 0 ? list.bands.filter(band => settings.bands.includes(band.id)) : list.bands
-  return [...unknownBands(settings, list), ...unknownLines(settings, bands), ...unknownStrengthSet(settings, list, bands)]
+  return [...unavailableMethod(settings), ...unknownBands(settings, list), ...unknownLines(settings, bands), ...unknownStrengthSet(settings, list, bands)]
 }
+
+/** Only what the engine does is taken: another method must never be answered with this one's temperature. */
+export const unavailableMethod = ({ method }: Pick<RetrievalSettings, 'method'>): FieldProblem[] => method === 'envelope'
+  ? []
+  : [{ path: 'settings.method', message: `The method ${method} is not available; use envelope, which takes one temperature from the line intensities.` }]
 
 function withoutList({ bands, lines, strengthSet }: RetrievalSettings): FieldProblem[] {
   const message = 'Name the line list that this is taken from.'

@@ -17,7 +17,7 @@ export async function createRecipe(actor: Actor, slug: string, input: RecipeCrea
   const { campaign } = await campaignFor(actor, slug, 'edit-recipes')
   const { settings } = input
   const problems = checkSettings(settings, settings.lineList === null ? null : await getLineList(settings.lineList))
-  if (problems.length > 0) throw new DomainError('validation_failed', 'The recipe names something that its line list does not have.', problems)
+  if (problems.length > 0) throw new DomainError('validation_failed', problems[0]!.message, problems)
   const recipe = { campaignId: campaign.id, slug: input.slug ?? (slugOf(input.name) || 'recipe'), name: input.name, settings }
   return recipeView(await storeNextVersion(actor, recipe), actor.name, true)
 }

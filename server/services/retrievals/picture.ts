@@ -1,8 +1,4 @@
-import { solveAt } from '#shared/engine/spectrum/fit'
-import { drawPicture } from '#shared/engine/spectrum/picture'
-import { placeLines } from '#shared/engine/spectrum/placing'
-import { layOutProblem } from '#shared/engine/spectrum/problem'
-import type { LineMeasurementSet, SpectrumRetrievalInput } from '#shared/engine/types'
+import { redrawPicture } from '#shared/engine/spectrum/redraw'
 import type { PictureData } from '#shared/types/retrieval'
 import { DomainError } from '#shared/utils/domain-error'
 import { prepareFromSpectrum } from '#shared/utils/retrieval/from-spectrum'
@@ -28,20 +24,7 @@ export async function retrievalPicture(actor: Actor, id: string): Promise<Pictur
   const prepared = prepareFromSpectrum({ spectrum, settings, lineList })
   const measurement = stored?.result?.spectrum?.measurement
   if ('problem' in prepared || !measurement || measurement.areas.length === 0) return spectrumOnly(spectrum)
-  return redraw(prepared.input, measurement)
-}
-
-function redraw(input: SpectrumRetrievalInput, measurement: LineMeasurementSet): PictureData {
-  const used = new Set(input.usedLabels ?? input.lines.map(line => line.label))
-  const { inside } = placeLines(input.lines, input.spectrum)
-  const lines = inside.filter(line => used.has(line.label))
-  const others = inside.filter(line => !used.has(line.label))
-  const [first, last] = measurement.pixelRange
-  const { wavelength } = input.spectrum
-  const pixel = (wavelength[last]! - wavelength[first]!) / Math.max(1, last - first)
-  const problem = layOutProblem(input, lines, others, measurement.fwhm, pixel)
-  if (!solveAt(problem.system, { shift: measurement.shift, logWidth: Math.log(measurement.fwhm) })) return spectrumOnly(input.spectrum)
-  return drawPicture(input.spectrum, problem)
+  return redrawPicture(prepared.input, measurement) ?? spectrumOnly(spectrum)
 }
 
 /** Where there is no fit to draw. */

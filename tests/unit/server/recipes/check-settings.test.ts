@@ -49,3 +49,10 @@ describe('the address of a recipe', () => {
     expect(recipeAddressSchema.safeParse(text).success).toBe(false)
   })
 })
+
+describe('the method of a recipe', () => {
+  it.each(['spectrum', 'two-temperature', 'optical-depth'] as const)('%s is refused, with a list and without', async (method) => {
+    expect(await problems({ method })).toEqual(['settings.method'])
+    expect(await problems({ method, lineList: 'oh-meinel', bands: ['3-1'] })).toEqual(['settings.method'])
+  })
+})
