@@ -23,12 +23,12 @@ export function lowestEnergy(lines: readonly ModelLine[], reading: ObservableRea
   return lines.reduce((low, line) => line.components.reduce((least, c) => Math.min(least, model.component(c, reading).energy), low), Infinity)
 }
 
-/** Part of each component in its line, summing to 1; equal parts where the strengths are not known. */
+/** Part of each component in its line, summing to 1; equal parts where the strengths are not known or bands are mixed: T does not rule between them. */
 export function componentShares(line: ModelLine, reading: ObservableReading, temperature: number): number[] {
   const zero = lowestEnergy([line], reading)
   const weights = line.components.map(component => componentWeight(component, reading, temperature, zero))
   const sum = weights.reduce((a, b) => a + b, 0)
-  const usable = sum > 0 && Number.isFinite(sum)
+  const usable = !line.mixesBands && sum > 0 && Number.isFinite(sum)
   return weights.map(weight => usable ? weight / sum : 1 / weights.length)
 }
 
