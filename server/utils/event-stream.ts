@@ -1,10 +1,13 @@
 import type { ServerResponse } from 'node:http'
+import { isFinal } from '#shared/types/phases'
 import { getHeader, type H3Event } from 'h3'
 import { logger } from '../logger'
 import type { Followed, FollowedEvent } from '../services/retrievals/follow'
 import { requireActor } from './auth'
 
 const heartbeatMs = 15_000
+/** So soon a stream notices that its sign-in has ended. */
+const lookMs = 3000
 /** Marks the id of the closing event: who comes back with it has heard all. */
 const doneMark = '.done'
 
@@ -39,48 +42,59 @@ function serve(event: H3Event, res: ServerResponse, followed: Followed, afterId:
     let last = afterId
     let stop = () => { /* not begun yet */ }
     let ended = false
+    let replayed = false
+    let quietSince = Date.now()
     const end = () => {
       if (ended) return
       ended = true
-      clearInterval(heartbeat)
+      clearInterval(looking)
       open.delete(end)
       stop()
       res.end()
       resolve()
     }
+    const write = (text: string) => {
+      res.write(text)
+      quietSince = Date.now()
+    }
+    const writeEvents = (events: FollowedEvent[]) => {
+      for (const { id, kind, data } of events.filter(one => one.id > last)) {
+        last = id
+        write(`id: ${id}\nevent: ${kind}\ndata: ${JSON.stringify(data)}\n\n`)
+      }
+    }
     // Read anew each time: a sign-in or a membership that has ended ends the stream.
-    const look = async (beat: boolean) => {
+    const look = async () => {
       try {
         event.context.session = undefined
         const counts = await followed.ask(await requireActor(event, 'read'))
+        const rest = counts.done ? await followed.rest(last) : []
         if (ended) return
-        if (beat) res.write(': still here\n\n')
-        if (!counts.done) return
-        res.write(`id: ${last}${doneMark}\nevent: done\ndata: ${JSON.stringify(counts)}\n\n`)
-        end()
+        if (counts.done) {
+          writeEvents(rest)
+          write(`id: ${last}${doneMark}\nevent: done\ndata: ${JSON.stringify(counts)}\n\n`)
+          end()
+        }
+        else if (Date.now() - quietSince >= heartbeatMs) write(': still here\n\n')
       }
       catch (error) {
         logger.info({ reason: (error as Error).message }, 'event stream ended')
         end()
       }
     }
-    const heartbeat = setInterval(() => void look(true), heartbeatMs)
+    const looking = setInterval(() => void look(), lookMs)
     open.add(end)
     res.on('close', end)
     const tell = (events: FollowedEvent[]) => {
       if (ended) return
-      for (const { id, kind, data } of events) {
-        last = Math.max(last, id)
-        res.write(`id: ${id}\nevent: ${kind}\ndata: ${JSON.stringify(data)}\n\n`)
-      }
-      if (replayed && events.some(({ data }) => data.phase === 'COMPLETED' || data.phase === 'ERROR' || data.phase === 'ABORTED')) void look(false)
+      writeEvents(events)
+      if (replayed && events.some(({ data }) => isFinal(data.phase))) void look()
     }
-    let replayed = false
     followed.start(afterId, tell).then((stopper) => {
       stop = stopper
       replayed = true
       if (ended) stop()
-      else void look(false)
+      else void look()
     }, end)
   })
 }

@@ -1,6 +1,7 @@
-import { and, asc, eq, gt, inArray, lt, max } from 'drizzle-orm'
+import { and, asc, desc, eq, gt, inArray, lt, lte, sql } from 'drizzle-orm'
 import type { Phase } from '../../../shared/types/phases'
 import type { Queryable } from '../client'
+import { databaseNow, secondsAgo } from './clock'
 import { retrievalEvents } from './schema'
 
 export type EventRow = typeof retrievalEvents.$inferSelect
@@ -9,27 +10,33 @@ export interface NewEvent { retrievalId: string, batchId: string, revision: numb
 /** Written in the transaction of the change that it tells. */
 export async function insertEvents(db: Queryable, events: NewEvent[]): Promise<void> {
   if (events.length === 0) return
-  const at = new Date()
-  await db.insert(retrievalEvents).values(events.map(event => ({ kind: 'phase' as const, ...event, at })))
+  await db.insert(retrievalEvents).values(events.map(event => ({ kind: 'phase' as const, ...event, at: databaseNow })))
 }
 
 export type EventScope = { batchId: string } | { retrievalId: string }
 
-/** One page of what happened after an id, for a stream that opens. */
-export const readEventsAfter = (db: Queryable, scope: EventScope, afterId: number, limit: number): Promise<EventRow[]> =>
+/** One page of what happened after an id and up to another, for a stream that opens. */
+export const readEventsBetween = (db: Queryable, scope: EventScope, afterId: number, upToId: number, limit: number): Promise<EventRow[]> =>
   db.select().from(retrievalEvents)
     .where(and(
       'batchId' in scope ? eq(retrievalEvents.batchId, scope.batchId) : eq(retrievalEvents.retrievalId, scope.retrievalId),
       gt(retrievalEvents.id, afterId),
+      lte(retrievalEvents.id, upToId),
     ))
     .orderBy(asc(retrievalEvents.id)).limit(limit)
 
-/** What happened anywhere after an id, for the poller that serves all open streams. */
-export const readAllEventsAfter = (db: Queryable, afterId: number, limit: number): Promise<EventRow[]> =>
-  db.select().from(retrievalEvents).where(gt(retrievalEvents.id, afterId)).orderBy(asc(retrievalEvents.id)).limit(limit)
+const ageMs = sql<number>`timestampdiff(microsecond, ${retrievalEvents.at}, utc_timestamp(3)) div 1000`.mapWith(Number)
 
-export async function newestEventId(db: Queryable): Promise<number> {
-  const [row] = await db.select({ id: max(retrievalEvents.id) }).from(retrievalEvents)
+/** What happened anywhere after an id, for the poller that serves all open streams, and how long ago by the database's clock. */
+export async function readAllEventsAfter(db: Queryable, afterId: number, limit: number): Promise<(EventRow & { ageMs: number })[]> {
+  const rows = await db.select({ event: retrievalEvents, ageMs }).from(retrievalEvents).where(gt(retrievalEvents.id, afterId)).orderBy(asc(retrievalEvents.id)).limit(limit)
+  return rows.map(row => ({ ...row.event, ageMs: row.ageMs }))
+}
+
+/** The newest event that is older than this; 0 when there is none. */
+export async function newestIdOlderThan(db: Queryable, milliseconds: number): Promise<number> {
+  const [row] = await db.select({ id: retrievalEvents.id }).from(retrievalEvents)
+    .where(lt(retrievalEvents.at, secondsAgo(milliseconds / 1000))).orderBy(desc(retrievalEvents.id)).limit(1)
   return row?.id ?? 0
 }
 

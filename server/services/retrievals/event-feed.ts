@@ -1,36 +1,43 @@
 import { database } from '../../database/client'
-import { newestEventId, readAllEventsAfter, type EventRow } from '../../database/retrievals/events'
+import { newestIdOlderThan, readAllEventsAfter, type EventRow } from '../../database/retrievals/events'
 import { logger } from '../../logger'
+import { countSettled, patienceMs } from './settled'
 
 const everyMs = 300
-/** Ids are given before commits: a smaller id may appear after a larger one, but hardly later than this. */
-const overlapMs = 5000
 const rowsAtOnce = 5000
 
 type Listener = (rows: EventRow[]) => void
+export interface Listening {
+  /** Every event up to this id is there to be read; the listener hears of those after it, in order. */
+  after: number
+  stop: () => void
+}
 
 const listeners = new Set<Listener>()
-let polling: Promise<void> | undefined
+let running = false
+/** All up to here has been told. Null until the database has been asked. */
+let told: number | null = null
+const waiting: (() => void)[] = []
 
 /** Hears of every event from now on. One poller serves all listeners of this process, and rests while there is none. */
-export function listen(listener: Listener): () => void {
-  listeners.add(listener)
-  polling ??= poll().finally(() => {
-    polling = undefined
-  })
-  return () => void listeners.delete(listener)
+export async function listen(listener: Listener): Promise<Listening> {
+  let after: number | null = null
+  const hear = (rows: EventRow[]) => {
+    if (after !== null) listener(rows)
+  }
+  listeners.add(hear)
+  if (!running) void poll()
+  while (told === null) await new Promise<void>(done => waiting.push(done))
+  after = told
+  return { after, stop: () => void listeners.delete(hear) }
 }
 
 async function poll(): Promise<void> {
-  const seen = new Map<number, number>()
-  let floor: number | null = null
+  running = true
   let failing = false
   while (listeners.size > 0) {
     try {
-      floor ??= Math.max(0, await newestEventId(database()) - 200)
-      const fresh = await unseen(floor, seen)
-      floor = forgetOld(seen, floor)
-      if (fresh.length > 0) for (const listener of listeners) listener(fresh)
+      await look()
       failing = false
     }
     catch (error) {
@@ -39,30 +46,20 @@ async function poll(): Promise<void> {
     }
     await new Promise(done => setTimeout(done, everyMs).unref())
   }
+  running = false
+  told = null
 }
 
-async function unseen(floor: number, seen: Map<number, number>): Promise<EventRow[]> {
-  const now = Date.now()
-  const fresh: EventRow[] = []
-  for (let after = floor; ;) {
-    const rows = await readAllEventsAfter(database(), after, rowsAtOnce)
-    fresh.push(...rows.filter(row => !seen.has(row.id)))
-    if (rows.length < rowsAtOnce) break
-    after = rows.at(-1)!.id
+async function look(): Promise<void> {
+  // What is older than the patience has no open gap below it.
+  told ??= await newestIdOlderThan(database(), patienceMs)
+  for (const ready of waiting.splice(0)) ready()
+  for (;;) {
+    const rows = await readAllEventsAfter(database(), told, rowsAtOnce)
+    const settled = rows.slice(0, countSettled(rows, told))
+    if (settled.length === 0) return
+    told = settled.at(-1)!.id
+    for (const listener of listeners) listener(settled)
+    if (rows.length < rowsAtOnce) return
   }
-  for (const row of fresh) seen.set(row.id, now)
-  return fresh
-}
-
-/** Everything at or below the new floor has been seen for so long that nothing can still appear there. */
-function forgetOld(seen: Map<number, number>, floor: number): number {
-  const old = Date.now() - overlapMs
-  let highest = floor
-  for (const [id, at] of seen) {
-    if (at >= old) continue
-    seen.delete(id)
-    highest = Math.max(highest, id)
-  }
-  for (const id of seen.keys()) if (id <= highest) seen.delete(id)
-  return highest
 }
