@@ -25,6 +25,7 @@ export function digestMail({ campaign, note, rows, link, accountLink, origin }: 
   const subject = `${done.length} of ${rows.length} temperatures${failed.length > 0 ? `, ${failed.length} failed` : ''}: ${campaign}`
   const counts = countWords(rows)
   const failures = failed.map(row => `${row.name}: ${row.reason ?? 'no temperature'}`)
+  const aborted = rows.filter(row => row.phase === 'ABORTED').map(row => `${row.name}: ${row.reason ?? 'aborted'}`)
   const flags = flagCounts(done)
   const more = done.length > shownRows ? [`and ${done.length - shownRows} more on the page`] : []
   return {
@@ -32,7 +33,7 @@ export function digestMail({ campaign, note, rows, link, accountLink, origin }: 
     accountLink,
     text: [
       subject, ...(note ? [note] : []), counts,
-      ...section('Failed:', failures), ...section('To look at:', flags),
+      ...section('Failed:', failures), ...section('Aborted:', aborted), ...section('To look at:', flags),
       ...section('Results:', [...done.slice(0, shownRows).map(row => `${row.name}: ${printed(row)}`), ...more]),
       '', link, '', `Mail preferences: ${accountLink}`,
     ].join('\n'),
@@ -44,6 +45,7 @@ export function digestMail({ campaign, note, rows, link, accountLink, origin }: 
         note ? paragraph(note, look.muted) : '',
         paragraph(counts),
         failures.length > 0 ? `${paragraph('Failed:', look.bad)}${list(failures)}` : '',
+        aborted.length > 0 ? `${paragraph('Aborted:', look.muted)}${list(aborted)}` : '',
         flags.length > 0 ? `${paragraph('To look at:', look.accent)}${list(flags)}` : '',
         table(done.slice(0, shownRows), origin),
         ...more.map(words => paragraph(words, look.muted)),

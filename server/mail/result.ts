@@ -23,8 +23,9 @@ const cid = 'lines@trotline'
 export function resultMail(facts: ResultMailFacts): MailContent {
   const { result, link, accountLink } = facts
   const temperature = result?.temperature ?? null
-  const headline = temperature ? `T = ${printTemperature(temperature).text}` : 'No temperature'
-  const subject = temperature ? `${headline.replace('T = ', '')}: ${facts.name}` : `No temperature: ${facts.name}`
+  const printed = temperature ? printTemperature(temperature).text : facts.phase === 'ABORTED' ? 'Aborted' : 'No temperature'
+  const headline = temperature ? `T = ${printed}` : printed
+  const subject = `${printed}: ${facts.name}`
   const details = [...(temperature ? [intervalWords(temperature)] : [facts.reason ?? 'The fit gave no temperature.']), ...(result ? setWords(result) : [])]
   const flags = result?.flags.map(flag => flagWords[flag]) ?? []
   const cautions = result?.cautions ?? []

@@ -20,13 +20,13 @@ export async function countPhases(db: Queryable, batchId: string): Promise<Parti
   return Object.fromEntries(rows.map(row => [row.phase, row.count]))
 }
 
-/** Batches of several that nobody works on any more, of which something is done, and whose digest is still due. */
+/** Batches of several that nobody works on any more, of which something has ended, and whose digest is still due. */
 export const findBatchesForDigest = (db: Queryable, since: Date, limit: number): Promise<BatchRecord[]> =>
   db.select().from(batches)
     .where(and(
       isNull(batches.digestAt), gt(batches.total, 1), gt(batches.createdAt, since),
       sql`not exists (select 1 from ${retrievals} r where r.batch_id = ${batches.id} and r.phase in ('QUEUED', 'EXECUTING'))`,
-      sql`exists (select 1 from ${retrievals} r where r.batch_id = ${batches.id} and r.phase in ('COMPLETED', 'ERROR'))`,
+      sql`exists (select 1 from ${retrievals} r where r.batch_id = ${batches.id} and r.phase in ('COMPLETED', 'ERROR', 'ABORTED'))`,
     ))
     .orderBy(asc(batches.id)).limit(limit)
 

@@ -18,8 +18,8 @@ export async function abortIdle(db: Queryable, target: Target, reason: string): 
 }
 
 /** Leaves word for whoever executes it. */
-export async function requestAbort(db: Queryable, target: Target): Promise<boolean> {
-  const [{ affectedRows }] = await db.update(retrievals).set({ abortRequested: true, version: sql`${retrievals.version} + 1` }).where(inPhase(target, ['EXECUTING']))
+export async function requestAbort(db: Queryable, target: Target, reason: string): Promise<boolean> {
+  const [{ affectedRows }] = await db.update(retrievals).set({ abortRequested: true, reason, version: sql`${retrievals.version} + 1` }).where(inPhase(target, ['EXECUTING']))
   return affectedRows === 1
 }
 

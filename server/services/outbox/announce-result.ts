@@ -2,7 +2,8 @@ import type { MailPreference } from '#shared/types/roles'
 import type { Transaction } from '../../database/client'
 import { newId } from '../../database/ids'
 import { insertOutbox } from '../../database/outbox/repository'
-import type { ClaimedRetrieval } from '../../database/retrievals/claim'
+import { readClaimed, type ClaimedRetrieval } from '../../database/retrievals/claim'
+import type { Actor } from '../accounts/actor'
 import { messageIdFor } from './message-id'
 
 interface Announced { mailPreference: MailPreference, batchTotal: number, batchDigestAt: Date | null, revision: number }
@@ -22,4 +23,13 @@ export async function announceResult(tx: Transaction, claimed: ClaimedRetrieval,
     id: newId(), subjectKey, userId: ownerId, kind: phase === 'COMPLETED' ? 'result' : 'failure',
     payload: { retrievalId: id, revision }, messageId: messageIdFor(subjectKey),
   })
+}
+
+/** Tells the owner that somebody else aborted; what one aborts oneself one knows. */
+export async function announceAbort(tx: Transaction, actor: Actor, id: string): Promise<void> {
+  const aborted = await readClaimed(tx, id)
+  if (!aborted || aborted.retrieval.ownerId === actor.userId || !wantsOwnMail({ ...aborted, revision: aborted.retrieval.revision })) return
+  const { revision, ownerId } = aborted.retrieval
+  const subjectKey = `abort:${id}:${revision}`
+  await insertOutbox(tx, { id: newId(), subjectKey, userId: ownerId, kind: 'failure', payload: { retrievalId: id, revision, abortedBy: actor.name }, messageId: messageIdFor(subjectKey) })
 }

@@ -10,7 +10,19 @@ import type { MailContent } from '../../mail/transport'
 
 /** The words of a mail, written when it is sent; null when what it speaks of is gone. */
 export async function writeMail({ kind, payload }: Pick<OutboxRecord, 'kind' | 'payload'>): Promise<MailContent | null> {
-  return kind === 'digest' ? writeDigest(String(payload.batchId)) : writeResult(String(payload.retrievalId), Number(payload.revision))
+  if (kind === 'digest') return writeDigest(String(payload.batchId))
+  const [id, revision] = [String(payload.retrievalId), Number(payload.revision)]
+  return payload.abortedBy ? writeAborted(id, revision, String(payload.abortedBy)) : writeResult(id, revision)
+}
+
+const links = (id: string) => ({ link: `${config().origin}/retrievals/${id}`, accountLink: `${config().origin}/account` })
+
+/** Written from the abort itself: the worker may still be on its way to it. */
+async function writeAborted(id: string, revision: number, by: string): Promise<MailContent | null> {
+  const row = await readListed(database(), id)
+  return row
+    ? resultMail({ name: row.name, campaign: row.campaignTitle, observedAt: row.observedAt, revision, phase: 'ABORTED', reason: `Aborted by ${by}.`, result: null, ...links(id) })
+    : null
 }
 
 async function writeResult(id: string, revision: number): Promise<MailContent | null> {
@@ -18,7 +30,7 @@ async function writeResult(id: string, revision: number): Promise<MailContent | 
   if (!row || !stored) return null
   return resultMail({
     name: row.name, campaign: row.campaignTitle, observedAt: row.observedAt, revision, phase: stored.phase, reason: stored.reason,
-    result: stored.result, link: `${config().origin}/retrievals/${id}`, accountLink: `${config().origin}/account`,
+    result: stored.result, ...links(id),
   })
 }
 

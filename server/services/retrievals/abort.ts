@@ -8,6 +8,7 @@ import { insertEvents } from '../../database/retrievals/events'
 import { insertResult } from '../../database/retrievals/finish'
 import { findRetrieval } from '../../database/retrievals/read'
 import type { Actor } from '../accounts/actor'
+import { announceAbort } from '../outbox/announce-result'
 import { mayChange, refuseUnless, retrievalFor } from './access'
 
 /** A claim may come between our look and our change; then we look again. */
@@ -28,9 +29,10 @@ export async function abortRetrieval(actor: Actor, id: string): Promise<{ id: st
 async function abortAs(tx: Transaction, actor: Actor, row: RetrievalRecord): Promise<boolean> {
   const { id, revision, campaignId, phase } = row
   const reason = `Aborted by ${actor.name}.`
-  const done = phase === 'EXECUTING' ? await requestAbort(tx, row) : await abortIdle(tx, row, reason)
+  const done = phase === 'EXECUTING' ? await requestAbort(tx, row, reason) : await abortIdle(tx, row, reason)
   if (!done) return false
   await writeLogbook(tx, { campaignId, objectKind: 'retrieval', objectId: id, actorId: actor.userId, action: 'abort', detail: { revision, phase } })
+  await announceAbort(tx, actor, id)
   if (phase === 'EXECUTING') return true
   await insertResult(tx, { retrievalId: id, revision, attempt: row.attempt, phase: 'ABORTED', settings: row.settings, result: null, provenance: null, reason, note: row.note, createdBy: row.ownerId, createdAt: new Date() })
   await insertEvents(tx, [{ retrievalId: id, batchId: row.batchId, revision, phase: 'ABORTED', progress: row.progress }])

@@ -8,7 +8,7 @@ import { logger } from '../../logger'
 import { runFit, type FitOutcome } from './fit'
 import { patiently } from './patience'
 import { noteEnded, noteRunning } from './running'
-import { storeOutcome } from './store-outcome'
+import { aborted, storeOutcome } from './store-outcome'
 
 /** A retrieval whose process died so often takes its process with it. */
 const maxAttempts = 20
@@ -63,7 +63,6 @@ async function outcomeOf(claimed: ClaimedRetrieval, stopping: AbortSignal): Prom
   }
 }
 
-const aborted: FitOutcome = { phase: 'ABORTED', reason: 'Aborted during the fit.', result: null, provenance: null }
 const failed = (reason: string): FitOutcome => ({ phase: 'ERROR', reason, result: null, provenance: null })
 
 /** Called between the stages of a fit: lets others run, and sees to the time limit, an abort and a stop. */

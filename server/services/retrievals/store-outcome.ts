@@ -4,6 +4,7 @@ import { database, type Transaction } from '../../database/client'
 import type { ClaimedRetrieval } from '../../database/retrievals/claim'
 import { insertEvents } from '../../database/retrievals/events'
 import { finishExecution, insertResult } from '../../database/retrievals/finish'
+import { findRetrieval } from '../../database/retrievals/read'
 import { writeLogbook } from '../../database/logbook/repository'
 import { announceResult } from '../outbox/announce-result'
 import type { FitOutcome } from './fit'
@@ -15,10 +16,13 @@ import type { FitOutcome } from './fit'
  */
 export const storeOutcome = (claimed: ClaimedRetrieval, outcome: FitOutcome): Promise<boolean> =>
   database().transaction(async tx => await store(tx, claimed, outcome)
-    || (outcome.phase !== 'ABORTED' && store(tx, claimed, { phase: 'ABORTED', reason: 'Aborted during the fit.', result: null, provenance: null })))
+    || (outcome.phase !== 'ABORTED' && store(tx, claimed, aborted)))
 
-async function store(tx: Transaction, claimed: ClaimedRetrieval, outcome: FitOutcome): Promise<boolean> {
+export const aborted: FitOutcome = { phase: 'ABORTED', reason: 'Aborted during the fit.', result: null, provenance: null }
+
+async function store(tx: Transaction, claimed: ClaimedRetrieval, given: FitOutcome): Promise<boolean> {
   const { retrieval } = claimed
+  const outcome = given.phase === 'ABORTED' ? { ...given, reason: await wordLeft(tx, retrieval.id) ?? given.reason } : given
   const { id, revision, attempt, batchId, campaignId, note } = retrieval
   const { phase, reason, result, provenance } = outcome
   if (!await finishExecution(tx, { id, revision, attempt, phase, columns: columnsOf(outcome) })) return false
@@ -31,6 +35,9 @@ async function store(tx: Transaction, claimed: ClaimedRetrieval, outcome: FitOut
   if (phase !== 'ABORTED') await announceResult(tx, claimed, phase)
   return true
 }
+
+/** Whoever asked for the abort left their name in the reason. */
+const wordLeft = async (tx: Transaction, id: string): Promise<string | null> => (await findRetrieval(tx, id))?.reason ?? null
 
 /** What lists show. An aborted revision leaves the columns of the one before. */
 function columnsOf({ phase, reason, result }: FitOutcome) {
