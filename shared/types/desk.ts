@@ -7,8 +7,9 @@ export interface Desk {
   running: { items: RetrievalRow[], total: number }
   /** My drafts and those that wait for me to complete them. */
   waitingForMe: { items: RetrievalRow[], total: number }
-  /** My retrievals that ended during the last seven days. */
+  /** My retrievals that ended during the last seven days; where none did, those of others in the campaigns that I review. */
   cameBack: { items: RetrievalRow[], total: number }
+  cameBackTo: 'me' | 'campaigns'
   /** Others' completed retrievals without a verdict, where I may review. */
   waitingForMyReview: { items: RetrievalRow[], total: number }
   /** Observed during the last 24 hours, by station. */

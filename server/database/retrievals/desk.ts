@@ -1,5 +1,5 @@
 import { and, count, eq, gte, inArray, isNull, ne, or, sql, type SQL } from 'drizzle-orm'
-import type { Phase } from '../../../shared/types/phases'
+import { finalPhases, type Phase } from '../../../shared/types/phases'
 import { campaigns, stations } from '../campaigns/schema'
 import type { Queryable } from '../client'
 import { retrievals } from './schema'
@@ -9,8 +9,12 @@ const within = (campaignIds: string[]): SQL | undefined => campaignIds.length > 
 export const mineInPhases = (userId: string, campaignIds: string[], phases: Phase[]): SQL | undefined =>
   and(within(campaignIds), eq(retrievals.ownerId, userId), inArray(retrievals.phase, phases))
 
-export const endedSince = (userId: string, campaignIds: string[], since: Date): SQL | undefined =>
-  and(mineInPhases(userId, campaignIds, ['COMPLETED', 'ERROR', 'ABORTED']), gte(retrievals.finishedAt, since))
+const ended = (since: Date): SQL | undefined => and(inArray(retrievals.phase, [...finalPhases]), gte(retrievals.finishedAt, since))
+
+export const mineEndedSince = (userId: string, campaignIds: string[], since: Date): SQL | undefined =>
+  and(within(campaignIds), eq(retrievals.ownerId, userId), ended(since))
+
+export const anyEndedSince = (campaignIds: string[], since: Date): SQL | undefined => and(within(campaignIds), ended(since))
 
 /** Completed, without a verdict, and not one's own unless the campaign allows that. */
 export const reviewable = (userId: string, campaignIds: string[]): SQL | undefined => and(

@@ -4,7 +4,7 @@ import type { RetrievalRow } from '#shared/types/retrieval'
 import { may } from '#shared/utils/permissions'
 import { database } from '../../database/client'
 import { countRetrievals, readNewest } from '../../database/retrievals/list'
-import { countLastNight, endedSince, mineInPhases, reviewable } from '../../database/retrievals/desk'
+import { countLastNight, anyEndedSince, mineEndedSince, mineInPhases, reviewable } from '../../database/retrievals/desk'
 import type { Actor } from '../accounts/actor'
 import { rolesByCampaign } from '../campaigns/access'
 import { rowView } from '../retrievals/view'
@@ -19,11 +19,19 @@ export async function deskOf(actor: Actor): Promise<Desk> {
   const [running, waitingForMe, cameBack, waitingForMyReview, lastNight] = await Promise.all([
     few(mineInPhases(actor.userId, campaignIds, ['QUEUED', 'EXECUTING'])),
     few(mineInPhases(actor.userId, campaignIds, ['PENDING', 'HELD'])),
-    few(endedSince(actor.userId, campaignIds, new Date(Date.now() - 7 * dayMs))),
+    cameBackTo(actor.userId, campaignIds, reviewed),
     few(reviewable(actor.userId, reviewed)),
     countLastNight(database(), campaignIds, new Date(Date.now() - dayMs)),
   ])
-  return { running, waitingForMe, cameBack, waitingForMyReview, lastNight }
+  return { running, waitingForMe, ...cameBack, waitingForMyReview, lastNight }
+}
+
+/** Who leads or analyses and has nothing of their own sees what others got. */
+async function cameBackTo(userId: string, campaignIds: string[], reviewed: string[]): Promise<Pick<Desk, 'cameBack' | 'cameBackTo'>> {
+  const since = new Date(Date.now() - 7 * dayMs)
+  const mine = await few(mineEndedSince(userId, campaignIds, since))
+  if (mine.total > 0 || reviewed.length === 0) return { cameBack: mine, cameBackTo: 'me' }
+  return { cameBack: await few(anyEndedSince(reviewed, since)), cameBackTo: 'campaigns' }
 }
 
 async function few(where: SQL | undefined): Promise<{ items: RetrievalRow[], total: number }> {

@@ -113,6 +113,7 @@ export const deskSchema = z.object({
   running: deskList,
   waitingForMe: deskList,
   cameBack: deskList,
+  cameBackTo: z.enum(['me', 'campaigns']),
   waitingForMyReview: deskList,
   lastNight: z.array(z.object({ station: z.string(), campaign: z.string(), total: z.int(), byPhase: z.partialRecord(phase, z.int()) })),
 })
