@@ -114,10 +114,16 @@ export async function stop(child: ChildProcess, signal: NodeJS.Signals = 'SIGTER
   await ended(child)
 }
 
-/** Ends MariaDB as a power cut would. */
-export function killDatabase(stack: Stack): void {
-  const [pid] = readFileSync(join(stack.folder, 'run/mariadb.pid'), 'utf8').split(' ')
+/** Ends a service as a power cut would. */
+export function killService(stack: Stack, name: 'mariadb' | 'redis' | 'maildev'): void {
+  const [pid] = readFileSync(join(stack.folder, `run/${name}.pid`), 'utf8').split(' ')
   process.kill(Number(pid), 'SIGKILL')
+}
+
+export const killDatabase = (stack: Stack): void => killService(stack, 'mariadb')
+
+export async function stopWorkers(stack: Stack): Promise<void> {
+  await Promise.all(stack.workers.splice(0).map(worker => stop(worker)))
 }
 
 /** Starts again whichever of the services is not running. */
