@@ -34,6 +34,11 @@ function areaBlock(covariance: Float64Array, size: number, count: number, factor
   return Array.from({ length: count * count }, (_, k) => factor * covariance[Math.floor(k / count) * size + k % count])
 }
 
+/** Squares of very large or very small numbers leave the range of a double. */
+function isFinite({ areas, covariance, continuum, shift, uShift, fwhm, uFwhm, chi2, noiseFromResiduals }: LineMeasurementSet): boolean {
+  return [...areas, ...covariance, ...continuum, shift, uShift, fwhm, uFwhm, chi2, noiseFromResiduals].every(number => number === null || Number.isFinite(number))
+}
+
 /** Puts the solved fit into the durable form. */
 export function summarise(input: SpectrumRetrievalInput, problem: FitProblem, outcome: FitOutcome, outside: RejectedLine[]): Measurement {
   const rejected = [...outside, ...problem.rejected]
@@ -63,5 +68,6 @@ export function summarise(input: SpectrumRetrievalInput, problem: FitProblem, ou
     pixelRange: [pixels.index[0], pixels.index[pixels.count - 1]],
     flags: flagsOf(input, problem, outcome, rejected),
   }
+  if (!isFinite(set)) return failedMeasurement('The numbers of the spectrum are too large or too small to be fitted.', rejected)
   return { set, lines, used: problem.used, rejected, fit: { problem, outcome } }
 }

@@ -17,7 +17,9 @@ function rounder(values: ArrayLike<number>): (x: number) => number {
   const exponent = digits - 1 - Math.floor(Math.log10(largest))
   if (Math.abs(exponent) > 290) return x => x
   const scale = 10 ** Math.abs(exponent)
-  return exponent >= 0 ? x => Math.round(x * scale) / scale : x => Math.round(x / scale) * scale
+  const rounded = exponent >= 0 ? (x: number) => Math.round(x * scale) / scale : (x: number) => Math.round(x / scale) * scale
+  // A pixel outside the fit may be so large that scaling it overflows.
+  return x => Number.isFinite(rounded(x)) ? rounded(x) : x
 }
 
 /** The indices that are drawn: the window with a quarter of its width to either side, every n-th of them, finite values only. */
