@@ -12,7 +12,8 @@ export function lineDistance(a: ModelLine, b: ModelLine): number {
 }
 
 /** One area for both. Lines of two bands make a band of their own: no scale of either speaks for them. */
-const merged = (a: ModelLine, b: ModelLine): ModelLine => ({
+/** Two lines that share one area. */
+export const merged = (a: ModelLine, b: ModelLine): ModelLine => ({
   label: `${a.label} + ${b.label}`,
   band: a.band === b.band ? a.band : `${a.band} + ${b.band}`,
   components: [...a.components, ...b.components],

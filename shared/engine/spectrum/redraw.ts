@@ -1,5 +1,6 @@
 import type { LineMeasurementSet, ModelLine, SpectrumRetrievalInput } from '../types'
 import { solveAt } from './fit'
+import { merged } from './grouping'
 import { drawPicture, type Picture } from './picture'
 import { integratedBelow, restoreProblem } from './problem'
 
@@ -11,7 +12,7 @@ function measuredGroups(lines: readonly ModelLine[], labels: readonly string[]):
     if (whole) return whole
     const parts = label.split(' + ').map(part => byLabel.get(part))
     const found = parts.filter(part => part !== undefined)
-    return found.length === parts.length ? { label, band: found[0].band, components: found.flatMap(part => part.components) } : null
+    return found.length === parts.length ? found.reduce(merged) : null
   })
   return groups.some(group => group === null) ? null : groups.filter(group => group !== null)
 }
