@@ -7,7 +7,7 @@ import { LinearSystem } from './linear-system'
 import type { FitPixels } from './pixels'
 import { pixelsWithin } from './pixels'
 import type { RejectedLine } from './placing'
-import { componentShares, componentWavelength, lineExtent, lineWeight, lowestEnergy, shareTemperature } from './shares'
+import { bandZeros, componentShares, componentWavelength, lineExtent, lineWeight, lowestEnergy, shareTemperature } from './shares'
 
 /** A line narrower than this many pixels is integrated over them. */
 export const integratedBelow = 2
@@ -36,10 +36,11 @@ export function fitWindow(lines: readonly ModelLine[], fwhm: number, pixel: numb
 function weightedLines(lines: readonly ModelLine[], input: SpectrumRetrievalInput): WeightedLine[] {
   const { reading, temperatureRange: [low, high] = [2, 20000] } = input
   const temperature = Math.min(high, Math.max(low, shareTemperature))
+  const ownZeros = bandZeros(input.lines, reading)
   const zeros = new Map<string, number>()
   for (const { band } of lines) if (!zeros.has(band)) zeros.set(band, lowestEnergy(lines.filter(line => line.band === band), reading))
   return lines.map((line) => {
-    const shares = componentShares(line, reading, temperature)
+    const shares = componentShares(line, reading, temperature, ownZeros)
     const components = line.components.map((component, c) => ({ wavelength: componentWavelength(component), share: shares[c] }))
     return { components, weight: lineWeight(line, reading, temperature, zeros.get(line.band) ?? 0) }
   })

@@ -23,12 +23,23 @@ export function lowestEnergy(lines: readonly ModelLine[], reading: ObservableRea
   return lines.reduce((low, line) => line.components.reduce((least, c) => Math.min(least, model.component(c, reading).energy), low), Infinity)
 }
 
-/** Part of each component in its line, summing to 1; equal parts where the strengths are not known or bands are mixed: T does not rule between them. */
-export function componentShares(line: ModelLine, reading: ObservableReading, temperature: number): number[] {
-  const zero = lowestEnergy([line], reading)
-  const weights = line.components.map(component => componentWeight(component, reading, temperature, zero))
+/** Zero of energy of each component's band, cm^-1: the lowest energy of its lines. T does not rule between bands. */
+export function bandZeros(lines: readonly ModelLine[], reading: ObservableReading): Map<LineComponent, number> {
+  const bands = new Map<string, ModelLine[]>()
+  for (const line of lines) bands.set(line.band, [...bands.get(line.band) ?? [], line])
+  return new Map([...bands.values()].flatMap((members) => {
+    const zero = lowestEnergy(members, reading)
+    return members.flatMap(line => line.components.map((component): [LineComponent, number] => [component, zero]))
+  }))
+}
+
+/** Part of each component in its line, summing to 1; equal parts where the strengths are not known. Mixed bands are taken as equally bright, each from its own zero. */
+export function componentShares(line: ModelLine, reading: ObservableReading, temperature: number, zeros: ReadonlyMap<LineComponent, number>): number[] {
+  const lowest = lowestEnergy([line], reading)
+  const zeroOf = (component: LineComponent) => line.mixesBands ? zeros.get(component) ?? lowest : lowest
+  const weights = line.components.map(component => componentWeight(component, reading, temperature, zeroOf(component)))
   const sum = weights.reduce((a, b) => a + b, 0)
-  const usable = !line.mixesBands && sum > 0 && Number.isFinite(sum)
+  const usable = sum > 0 && Number.isFinite(sum)
   return weights.map(weight => usable ? weight / sum : 1 / weights.length)
 }
 

@@ -17,6 +17,7 @@ const pixels = pixelsWithin(draw({ lines: drawn, step: 0.2, seed: 3 }), 996, 100
 function dense(shift: number, fwhm: number, integrated: boolean, which: 'value' | 'byShift' | 'byLogWidth'): number[][] {
   const columns = new LineColumns(pixels, lines, integrated)
   columns.fill(shift, fwhm)
+  columns.fillSlopes()
   return lines.map((_, i) => Array.from({ length: pixels.count }, (_, p) => p >= columns.start[i] && p < columns.end[i] ? columns[which][columns.offset[i] + p - columns.start[i]] : 0))
 }
 
