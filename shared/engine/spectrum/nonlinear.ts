@@ -23,6 +23,7 @@ export class ShiftAndWidth {
 
   /** At the solution that the system holds now. */
   linearise(): void {
+    this.system.columns.fillSlopes()
     this.fillDense()
     const { system, dense, cross, response } = this
     const lines = system.columns.lines.length

@@ -47,12 +47,24 @@ export function pixelsWithin(spectrum: SpectrumInput, from: number, to: number, 
   for (let i = lowerBound(wavelength, from); i < wavelength.length && wavelength[i] <= to; i++) {
     if (usable(spectrum, i) && !masked(wavelength[i], masks)) chosen.push(i)
   }
-  return {
-    count: chosen.length,
-    wavelength: Float64Array.from(chosen, i => wavelength[i]),
-    values: Float64Array.from(chosen, i => values[i]),
-    weight: Float64Array.from(chosen, i => sigma === null ? 1 : 1 / sigma[i]),
-    width: Float64Array.from(chosen, i => pixelWidth(wavelength, i)),
-    index: Int32Array.from(chosen),
+  const pixels = emptyPixels(chosen.length)
+  // A plain loop: Float64Array.from with a function takes twenty times as long.
+  for (let p = 0; p < chosen.length; p++) {
+    const i = chosen[p]
+    pixels.wavelength[p] = wavelength[i]
+    pixels.values[p] = values[i]
+    pixels.weight[p] = sigma === null ? 1 : 1 / sigma[i]
+    pixels.width[p] = pixelWidth(wavelength, i)
+    pixels.index[p] = i
   }
+  return pixels
 }
+
+const emptyPixels = (count: number): FitPixels => ({
+  count,
+  wavelength: new Float64Array(count),
+  values: new Float64Array(count),
+  weight: new Float64Array(count),
+  width: new Float64Array(count),
+  index: new Int32Array(count),
+})

@@ -24,7 +24,9 @@ export function shiftScore(pixels: FitPixels, running: Float64Array, lines: read
 
 /** Running sum of signal above its mean, so that a mean over any range costs two look-ups. */
 export function runningSum(values: Float64Array, sign: 1 | -1): Float64Array {
-  const mean = values.reduce((a, b) => a + b, 0) / values.length
+  let total = 0
+  for (const value of values) total += value
+  const mean = total / values.length
   const sum = new Float64Array(values.length + 1)
   for (let p = 0; p < values.length; p++) sum[p + 1] = sum[p] + sign * (values[p] - mean)
   return sum

@@ -1,8 +1,9 @@
+import { nthSmallest } from '../statistics/nth-smallest'
 import type { FitPixels } from './pixels'
 
 /** Value that a quarter of the pixels lie below: a floor that lines do not lift. */
 export function lowerQuartile(values: Float64Array): number {
-  return Float64Array.from(values).sort()[Math.floor(values.length / 4)]
+  return nthSmallest(values.slice(), Math.floor(values.length / 4))
 }
 
 /** Distance from pixel `peak` to where the signal falls to `half`, going by `step`, nm. */
