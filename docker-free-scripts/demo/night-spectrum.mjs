@@ -5,12 +5,10 @@ import { normal } from './random.mjs'
 /** First pixel in vacuum nm: the window holds P1(2) to P1(5). */
 const windowStart = { '3-1': 1514, '4-2': 1593, '5-2': 1080 }
 const pixelCount = 1024
-const pixelWidth = 0.05
 const strengthSet = 'brooke2016'
 
 /** Every component of every band inside the window: place (nm) and photons, the band's own P1(2) being `bandStrength`. */
-function emission({ start, temperature, bandStrength }) {
-  const end = start + pixelCount * pixelWidth
+function emission({ start, end, temperature, bandStrength }) {
   return ohMeinel.bands.flatMap((band) => {
     const scale = bandStrength / bandReference(band, temperature)
     return band.lines.flatMap(line => line.components
@@ -37,11 +35,10 @@ function profile(x, lines, fwhm) {
 /**
  * An invented night-sky spectrum as a text table: wavelength, photons, sigma. Noise is Gaussian and seeded.
  * `ceiling` clips the values as a full detector does.
- * @param {{ band: string, temperature: number, seed: number, medium: string, head?: string[], bandStrength?: number, noise?: number, fwhm?: number, ceiling?: number }} night
+ * @param {{ band: string, temperature: number, seed: number, medium: string, head?: string[], bandStrength?: number, noise?: number, fwhm?: number, ceiling?: number, start?: number, pixelWidth?: number }} night
  */
-export function nightSpectrum({ band, temperature, seed, medium, head = [], bandStrength = 400, noise = 6, fwhm = 0.22, ceiling = Infinity }) {
-  const start = windowStart[band]
-  const lines = emission({ start, temperature, bandStrength })
+export function nightSpectrum({ band, temperature, seed, medium, head = [], bandStrength = 400, noise = 6, fwhm = 0.22, ceiling = Infinity, start = windowStart[band], pixelWidth = 0.05 }) {
+  const lines = emission({ start, end: start + pixelCount * pixelWidth, temperature, bandStrength })
   const draw = normal(seed)
   const rows = Array.from({ length: pixelCount }, (_, index) => {
     const vacuum = start + index * pixelWidth

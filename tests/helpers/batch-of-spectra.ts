@@ -19,8 +19,10 @@ export function fineSpectrum(count: number, seed: number): string {
 
 export const said = about
 
+const night = (i: number): string => nightSpectrum({ band: '3-1', medium: 'vacuum', temperature: 180 + i / 10, seed: 1 + i, head: ['Invented test data.'] })
+
 /** A campaign whose owner gets a mail for each result, with spectra uploaded and nothing queued. */
-export async function uploadSpectra(connection: Connection, origin: string, slug: string, count: number): Promise<SpectraAtHand> {
+export async function uploadSpectra(connection: Connection, origin: string, slug: string, count: number, spectrumOf = night): Promise<SpectraAtHand> {
   const campaignId = await addCampaign(connection, slug)
   const owner = await addAccount(connection, origin, { name: slug, preference: 'each', campaignId, role: 'observer' })
   const spectrumIds: string[] = []
@@ -28,8 +30,7 @@ export async function uploadSpectra(connection: Connection, origin: string, slug
     const form = new FormData()
     form.append('about', JSON.stringify(about))
     for (let i = start; i < Math.min(count, start + 50); i++) {
-      const text: string = nightSpectrum({ band: '3-1', medium: 'vacuum', temperature: 180 + i / 10, seed: 1 + i, head: ['Invented test data.'] })
-      form.append('files', new Blob([text]), `${slug}-${i}.csv`)
+      form.append('files', new Blob([spectrumOf(i)]), `${slug}-${i}.csv`)
     }
     const response = await fetch(`${origin}/api/campaigns/${slug}/spectra`, { method: 'POST', headers: { authorization: `Bearer ${owner.token}` }, body: form })
     const { items } = await response.json() as { items: { ok: boolean, id: string, missing: string[] }[] }
