@@ -12,8 +12,10 @@ const drainMs = 15_000
 export function startWorker(): { close: () => Promise<void> } {
   const stopping = new AbortController()
   const redis = redisConnection('worker')
+  // Loaded while the connection opens, so that the first job does not wait for it.
+  const handler = import('./handlers/fit-retrieval')
   const worker = new Worker(fitQueueName(), async (job) => {
-    const { fitRetrieval } = await import('./handlers/fit-retrieval')
+    const { fitRetrieval } = await handler
     await fitRetrieval(fitRetrievalPayload.parse(job.data), stopping.signal)
   }, { connection: redis, concurrency: config().workerConcurrency, lockDuration: 10_000, stalledInterval: 5_000, maxStalledCount: 5, drainDelay: 1 })
   worker.on('error', error => logger.warn({ reason: error.message }, 'queue worker'))

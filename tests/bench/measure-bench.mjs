@@ -8,7 +8,7 @@ import { runTwin } from './scipy.mjs'
 
 const spectrumCount = 20
 const passes = 15
-const target = 20
+const target = 10
 
 const { benchInput, curveFitJob, measureLines } = await load('measure-fits.ts')
 const inputs = Array.from({ length: spectrumCount }, (_, i) => benchInput(benchSpectrum(i), benchSettings))

@@ -31,14 +31,14 @@ async function storedResults(connection: Connection): Promise<Stored[]> {
   })
 }
 
-/** A whole empty service with one worker: spectra uploaded, then one batch of them all. */
+/** A whole empty service with one worker: spectra uploaded, then one batch of them all, told by one digest as by default. */
 export async function runPipeline(count: number, spectrumOf: (i: number) => string, settings: object): Promise<{ seconds: number, stored: Stored[] }> {
   const stack = await createStack('pipeline')
   try {
     await startWeb(stack)
     await startWorker(stack)
     const connection = await connect(stack.databaseUrl)
-    const atHand = await uploadSpectra(connection, stack.origin, 'bench', count, spectrumOf)
+    const atHand = await uploadSpectra(connection, stack.origin, 'bench', count, { spectrumOf, preference: 'digest' })
     const seconds = await timeBatch(connection, atHand, settings)
     const stored = await storedResults(connection)
     await connection.end()

@@ -21,10 +21,12 @@ export const said = about
 
 const night = (i: number): string => nightSpectrum({ band: '3-1', medium: 'vacuum', temperature: 180 + i / 10, seed: 1 + i, head: ['Invented test data.'] })
 
-/** A campaign whose owner gets a mail for each result, with spectra uploaded and nothing queued. */
-export async function uploadSpectra(connection: Connection, origin: string, slug: string, count: number, spectrumOf = night): Promise<SpectraAtHand> {
+interface Options { spectrumOf?: (i: number) => string, preference?: 'each' | 'digest' }
+
+/** A campaign with spectra uploaded and nothing queued; its owner gets a mail for each result unless told otherwise. */
+export async function uploadSpectra(connection: Connection, origin: string, slug: string, count: number, { spectrumOf = night, preference = 'each' }: Options = {}): Promise<SpectraAtHand> {
   const campaignId = await addCampaign(connection, slug)
-  const owner = await addAccount(connection, origin, { name: slug, preference: 'each', campaignId, role: 'observer' })
+  const owner = await addAccount(connection, origin, { name: slug, preference, campaignId, role: 'observer' })
   const spectrumIds: string[] = []
   for (let start = 0; start < count; start += 50) {
     const form = new FormData()
