@@ -23,7 +23,7 @@ const environmentSchema = z.object({
   TROTLINE_TRUST_PROXY: z.stringbool().default(false),
   TROTLINE_INSTANCE: z.string().regex(/^[a-z0-9-]{1,32}$/, 'takes small letters, digits and hyphens').default('main'),
   TROTLINE_LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
-  TROTLINE_WORKER_CONCURRENCY: count(2),
+  TROTLINE_WORKER_CONCURRENCY: count(4),
   TROTLINE_MAX_FILE_BYTES: count(megabytes(32)),
   TROTLINE_MAX_REQUEST_BYTES: count(megabytes(256)),
   TROTLINE_MAX_JSON_BYTES: count(megabytes(8)),
