@@ -1,8 +1,6 @@
 import * as z from 'zod'
 import type { Page } from '../types/retrieval'
-
-export const ulidPattern = /^[0-7][0-9A-HJKMNP-TV-Z]{25}$/
-export const ulidSchema = z.string().regex(ulidPattern, 'This is not an id of Trotline.')
+import { ulidSchema } from './ids'
 
 /** Lists in the order of their ids; the cursor is the last id seen. */
 export const pageQuerySchema = z.strictObject({

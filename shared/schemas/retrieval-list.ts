@@ -1,7 +1,7 @@
 import * as z from 'zod'
 import { flagNames } from '../engine/types'
 import { phases } from '../types/phases'
-import { ulidSchema } from './paging'
+import { ulidSchema } from './ids'
 
 /** `?phase=ERROR&phase=HELD` and `?phase=ERROR,HELD` say the same. */
 const several = <T extends z.ZodType>(item: T) => z.preprocess(

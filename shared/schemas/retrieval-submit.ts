@@ -1,6 +1,6 @@
 import * as z from 'zod'
 import { lineTableSchema } from './line-table'
-import { ulidSchema } from './paging'
+import { ulidSchema } from './ids'
 import { settingsSchema } from './settings'
 
 export const maxSpectraPerRequest = 1000
@@ -36,6 +36,3 @@ export type ReviseRetrieval = z.output<typeof reviseRetrievalSchema>
 
 export const reviewRetrievalSchema = z.strictObject({ verdict: z.enum(['accept', 'return']), note })
 export type ReviewRetrieval = z.output<typeof reviewRetrievalSchema>
-
-/** Routes that address one thing by its id. */
-export const idParams = z.object({ id: ulidSchema })

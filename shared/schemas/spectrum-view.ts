@@ -1,6 +1,6 @@
 import * as z from 'zod'
 import { versionSchema } from './campaign'
-import { ulidSchema } from './paging'
+import { ulidSchema } from './ids'
 import { spectrumAboutSchema } from './spectrum'
 
 export const spectrumParams = z.strictObject({ id: ulidSchema })

@@ -1,4 +1,4 @@
-import { idParams } from '#shared/schemas/retrieval-submit'
+import { idParams } from '#shared/schemas/ids'
 import { batchCounts } from '../../../services/batches/index'
 import { defineRoute } from '../../../utils/route'
 

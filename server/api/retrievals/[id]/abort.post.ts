@@ -1,4 +1,4 @@
-import { idParams } from '#shared/schemas/retrieval-submit'
+import { idParams } from '#shared/schemas/ids'
 import { abortRetrieval } from '../../../services/retrievals/abort'
 import { defineRoute } from '../../../utils/route'
 

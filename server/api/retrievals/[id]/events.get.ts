@@ -1,4 +1,4 @@
-import { idParams } from '#shared/schemas/retrieval-submit'
+import { idParams } from '#shared/schemas/ids'
 import { followRetrieval } from '../../../services/retrievals/follow'
 import { sendEvents } from '../../../utils/event-stream'
 import { defineRoute } from '../../../utils/route'

@@ -1,4 +1,4 @@
-import { idParams } from '#shared/schemas/retrieval-submit'
+import { idParams } from '#shared/schemas/ids'
 import { retrievalDetail } from '../../../services/retrievals/detail'
 import { defineRoute } from '../../../utils/route'
 

@@ -1,4 +1,4 @@
-import { idParams } from '#shared/schemas/retrieval-submit'
+import { idParams } from '#shared/schemas/ids'
 import { retrievalPicture } from '../../../services/retrievals/picture'
 import { defineRoute } from '../../../utils/route'
 

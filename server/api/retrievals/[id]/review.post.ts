@@ -1,4 +1,5 @@
-import { idParams, reviewRetrievalSchema } from '#shared/schemas/retrieval-submit'
+import { idParams } from '#shared/schemas/ids'
+import { reviewRetrievalSchema } from '#shared/schemas/retrieval-submit'
 import { reviewRetrieval } from '../../../services/retrievals/review'
 import { defineRoute } from '../../../utils/route'
 

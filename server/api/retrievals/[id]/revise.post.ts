@@ -1,4 +1,5 @@
-import { idParams, reviseRetrievalSchema } from '#shared/schemas/retrieval-submit'
+import { idParams } from '#shared/schemas/ids'
+import { reviseRetrievalSchema } from '#shared/schemas/retrieval-submit'
 import { reviseRetrieval } from '../../../services/retrievals/revise'
 import { defineRoute } from '../../../utils/route'
 

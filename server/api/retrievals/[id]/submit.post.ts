@@ -1,4 +1,4 @@
-import { idParams } from '#shared/schemas/retrieval-submit'
+import { idParams } from '#shared/schemas/ids'
 import { submitDraft } from '../../../services/retrievals/submit-draft'
 import { defineRoute } from '../../../utils/route'
 

@@ -1,7 +1,7 @@
 import type { Phase } from '#shared/types/phases'
 
 /** What a phase means and what to do now, for the page of one retrieval. */
-export const phaseWords: Record<Phase, { title: string, next: string }> = {
+export const phaseAdvice: Record<Phase, { title: string, next: string }> = {
   PENDING: { title: 'Drafted, not submitted', next: 'Submit it when it is ready.' },
   QUEUED: { title: 'Waiting for its turn', next: 'You may leave this page; the result comes by mail too.' },
   EXECUTING: { title: 'Being fitted', next: 'This page moves to the result by itself.' },
