@@ -1,4 +1,5 @@
 import { fileURLToPath } from 'node:url'
+import { bundleThread } from './server/threads/bundle.mjs'
 
 const indexing = { compilerOptions: { noUncheckedIndexedAccess: false } }
 
@@ -35,6 +36,7 @@ export default defineNuxtConfig({
     // Before the sign-in module's own plugin.
     plugins: [fileURLToPath(new URL('./server/start/auth-origin.ts', import.meta.url))],
     serverAssets: [{ baseName: 'migrations', dir: fileURLToPath(new URL('./drizzle', import.meta.url)), pattern: '*.sql' }],
+    virtual: { '#compute-thread': async () => `export default ${JSON.stringify(await bundleThread())}` },
     esbuild: { options: { target: 'node20' } },
     typescript: { tsConfig: indexing },
   },

@@ -1,9 +1,9 @@
-import type { LineRetrievalInput, RetrievalResult } from '#shared/engine/types'
+import type { LineRetrievalInput } from '#shared/engine/types'
 import type { LineTable } from '#shared/schemas/line-table'
 import type { RetrievalSettings } from '#shared/schemas/settings'
-import type { FieldProblem } from '#shared/types/error-codes'
 import type { LineList } from '#shared/types/line-list'
 import type { SpectrumAbout } from '#shared/types/spectrum'
+import type { FitAnswer } from '#shared/utils/retrieval/fit'
 import type { ReadSummary } from '~/utils/submit/entries'
 
 /** A thinned spectrum in the file's own axis, for the plot before anything is known. */
@@ -18,9 +18,6 @@ export interface EngineTasks {
   fitLines: { ask: { input: LineRetrievalInput }, answer: FitAnswer }
 }
 export type TaskName = keyof EngineTasks
-
-/** A fit, or what is missing to make one. */
-export type FitAnswer = { result: RetrievalResult, problems: null } | { result: null, problems: FieldProblem[] }
 
 export interface Request { id: number, task: TaskName, ask: EngineTasks[TaskName]['ask'] }
 export type Reply = { id: number, answer: EngineTasks[TaskName]['answer'] } | { id: number, error: string }

@@ -1,5 +1,6 @@
 import type { Connection } from 'mysql2/promise'
 import { nightSpectrum } from '../../docker-free-scripts/demo/night-spectrum.mjs'
+import ohMeinel from '#shared/line-lists/oh-meinel.json'
 import { addAccount, addCampaign, type Account } from './accounts'
 
 export const settings = { observable: 'photon-emission', lineList: 'oh-meinel', bands: ['3-1'], lines: ['P1(2)', 'P1(3)', 'P1(4)', 'P1(5)'], strengthSet: 'brooke2016' }
@@ -8,8 +9,20 @@ const about = { axisUnit: 'nm', medium: 'vacuum', valueKind: 'photons', columns:
 export interface SpectraAtHand { owner: Account, slug: string, spectrumIds: string[] }
 
 /** An invented night of the band 3-1 on `count` pixels, its axis, values and sigmas interpolated: something that keeps a fit busy. */
-export function fineSpectrum(count: number, seed: number): string {
-  const rows: number[][] = nightSpectrum({ band: '3-1', medium: 'vacuum', temperature: 190, seed }).trim().split('\n').slice(1).map((line: string) => line.split(',').map(Number))
+export const fineSpectrum = (count: number, seed: number): string =>
+  interpolated(nightSpectrum({ band: '3-1', medium: 'vacuum', temperature: 190, seed }), count)
+
+/** All of OH from 500 to 2400 nm: with every line of every band a fit takes about half a minute. */
+export const wideSpectrum = (count: number): string =>
+  interpolated(nightSpectrum({ band: '3-1', medium: 'vacuum', temperature: 190, seed: 1, start: 500, pixelWidth: 1.85, fwhm: 6 }), count)
+
+export const wideSettings = {
+  observable: 'photon-emission', lineList: 'oh-meinel', bands: ohMeinel.bands.map(({ id }) => id),
+  lines: [...new Set(ohMeinel.bands.flatMap(({ lines }) => lines.map(({ label }) => label)))],
+}
+
+function interpolated(night: string, count: number): string {
+  const rows: number[][] = night.trim().split('\n').slice(1).map((line: string) => line.split(',').map(Number))
   const step = (rows.length - 1.001) / (count - 1)
   return Array.from({ length: count }, (_, i) => {
     const left = Math.floor(i * step)

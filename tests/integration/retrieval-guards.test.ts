@@ -3,19 +3,20 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { closeDatabase, connectDatabase } from '../../server/database/client'
 import { finishExecution } from '../../server/database/retrievals/finish'
 import { addAccount, addCampaign, connect, rowsOf, type Account } from '../helpers/accounts'
-import { fineSpectrum, said, settings } from '../helpers/batch-of-spectra'
+import { fineSpectrum, said, settings, wideSettings, wideSpectrum } from '../helpers/batch-of-spectra'
 import { lineTable } from '../helpers/line-tables'
 import { mailsTo } from '../helpers/mailbox'
 import { createStack, destroyStack, eventually, killService, sleep, startServices, startWeb, startWorker, stopWorkers, type Stack } from '../helpers/stack'
 
 interface Detail { phase: string, reason: string | null, temperature: number | null }
 
+const fitSeconds = 12
 let stack: Stack
 let connection: Connection
 let observer: Account, analyst: Account
 
 beforeAll(async () => {
-  stack = await createStack('guards')
+  stack = await createStack('guards', { TROTLINE_FIT_SECONDS: String(fitSeconds) })
   await startWeb(stack)
   connection = await connect(stack.databaseUrl)
   const campaignId = await addCampaign(connection, 'guards')
@@ -35,14 +36,18 @@ async function submit(body: object): Promise<string> {
 const submitTable = (temperature: number, name: string) => submit({ lineTable: lineTable(temperature, name) })
 
 /** A retrieval whose fit takes long enough to be met while it runs. */
-async function submitFine(seed: number): Promise<string> {
+const submitFine = (seed: number) => submitSpectrum(fineSpectrum(500_000, seed), `fine-${seed}.csv`, settings)
+/** A retrieval whose fit takes longer than it may. */
+const submitWide = (pixels: number) => submitSpectrum(wideSpectrum(pixels), `wide-${pixels}.csv`, wideSettings)
+
+async function submitSpectrum(text: string, name: string, terms: object): Promise<string> {
   const form = new FormData()
   form.append('about', JSON.stringify(said))
-  form.append('files', new Blob([fineSpectrum(500_000, seed)]), `fine-${seed}.csv`)
+  form.append('files', new Blob([text]), name)
   const response = await fetch(`${stack.origin}/api/campaigns/guards/spectra`, { method: 'POST', headers: { authorization: `Bearer ${observer.token}` }, body: form })
   const { items: [item] } = await response.json() as { items: [{ ok: boolean, id: string }] }
   expect(item).toMatchObject({ ok: true, missing: [] })
-  return submit({ spectrumIds: [item.id], settings })
+  return submit({ spectrumIds: [item.id], settings: terms })
 }
 
 const detail = async (id: string) => (await observer.call<Detail>('GET', `/api/retrievals/${id}`)).body
@@ -130,6 +135,33 @@ describe('an abort', () => {
     }, 'both mails are in the box')
     expect(mails.map(mail => mail.subject).sort()).toEqual(['Aborted: a draft', 'Aborted: fine-13.csv'])
     for (const { text } of mails) expect(text).toContain('Aborted by analyst.')
+  })
+})
+
+describe('a fit that takes too long', () => {
+  it('ends at once when it is aborted', async () => {
+    const id = await submitWide(100_001)
+    await isExecuting(id)
+    await sleep(2000)
+    expect((await detail(id)).phase).toBe('EXECUTING')
+    expect((await observer.call('POST', `/api/retrievals/${id}/abort`)).status).toBe(202)
+    await reaches(id, 'ABORTED', 2)
+  })
+
+  it('ends at its limit with the reason in words, is heard of all the while, and leaves the worker well', async () => {
+    const id = await submitWide(100_000)
+    await isExecuting(id)
+    const ages: number[] = []
+    const ended = await eventually(async () => {
+      const [row] = await rowsOf<{ phase: string, age: number }>(connection, 'SELECT phase, TIMESTAMPDIFF(MICROSECOND, heartbeat_at, UTC_TIMESTAMP(3)) / 1e6 AS age FROM retrievals WHERE id = ?', [id])
+      if (row!.phase === 'EXECUTING') ages.push(Number(row!.age))
+      return row!.phase !== 'EXECUTING' && detail(id)
+    }, 'it ends', fitSeconds + 5)
+    expect(ended).toMatchObject({ phase: 'ERROR', reason: expect.stringContaining(`longer than the ${fitSeconds} s`) })
+    expect(ages.length).toBeGreaterThan(20)
+    expect(Math.max(...ages)).toBeLessThan(4)
+    expect(await resultsOf(id)).toEqual([{ attempt: 1, phase: 'ERROR' }])
+    await reaches(await submitTable(180, 'after the long one'), 'COMPLETED', 10)
   })
 })
 

@@ -1,23 +1,18 @@
-import { setImmediate as breathe } from 'node:timers/promises'
 import { DomainError } from '#shared/utils/domain-error'
 import { config } from '../../config'
-import { readAbortFlag, readClaimed, releaseRetrieval, takeRetrieval, type ClaimedRetrieval } from '../../database/retrievals/claim'
+import { readClaimed, releaseRetrieval, takeRetrieval, type ClaimedRetrieval } from '../../database/retrievals/claim'
 import { insertEvents } from '../../database/retrievals/events'
 import { database } from '../../database/client'
 import { logger } from '../../logger'
+import { ThreadTimeLimit } from '../../threads/pool'
 import { runFit, type FitOutcome } from './fit'
 import { patiently } from './patience'
 import { noteEnded, noteRunning } from './running'
 import { aborted, storeOutcome } from './store-outcome'
+import { AbortWanted, NoLongerHeld, watchOver } from './watch'
 
 /** A retrieval whose process died so often takes its process with it. */
 const maxAttempts = 20
-/** Between chunks the abort flag is read at most this often. */
-const flagEveryMs = 250
-
-class TimeLimitError extends Error {}
-class AbortWanted extends Error {}
-class NoLongerHeld extends Error {}
 
 /** Claims, fits and stores one revision. What cannot be claimed is somebody else's, or done. */
 export async function executeRetrieval(order: { id: string, revision: number }, stopping: AbortSignal): Promise<void> {
@@ -49,39 +44,25 @@ const claim = (order: { id: string, revision: number }): Promise<ClaimedRetrieva
 async function outcomeOf(claimed: ClaimedRetrieval, stopping: AbortSignal): Promise<FitOutcome | null> {
   if (claimed.retrieval.abortRequested) return aborted
   if (claimed.retrieval.attempt > maxAttempts) return failed(`The worker stopped ${maxAttempts} times during this fit, so it was set aside. Change its settings or tell the administrator.`)
+  const watch = watchOver(claimed, stopping)
   try {
-    const outcome = await patiently(() => runFit(claimed, checkpoint(claimed, stopping)), stopping)
-    return outcome
+    return await patiently(() => runFit(claimed, watch.signal), stopping)
   }
   catch (error) {
     if (stopping.aborted) throw error
     if (error instanceof NoLongerHeld) return null
     if (error instanceof AbortWanted) return aborted
-    if (error instanceof TimeLimitError || error instanceof DomainError) return failed(error.message)
+    if (error instanceof ThreadTimeLimit) return failed(`The fit took longer than the ${config().limits.fitSeconds} s that one retrieval may take. Use fewer lines or pixels.`)
+    if (error instanceof DomainError) return failed(error.message)
     logger.error({ err: error, retrieval: claimed.retrieval.id }, 'fit failed')
     return failed('The program failed on this input. The fault is in the service\'s log; tell the administrator the id of this retrieval.')
+  }
+  finally {
+    watch.end()
   }
 }
 
 const failed = (reason: string): FitOutcome => ({ phase: 'ERROR', reason, result: null, provenance: null })
-
-/** Called between the stages of a fit: lets others run, and sees to the time limit, an abort and a stop. */
-function checkpoint({ retrieval }: ClaimedRetrieval, stopping: AbortSignal): () => Promise<void> {
-  const begun = performance.now()
-  const limit = config().limits.fitSeconds
-  let lastLook = begun
-  return async () => {
-    await breathe()
-    stopping.throwIfAborted()
-    const now = performance.now()
-    if (now - begun > limit * 1000) throw new TimeLimitError(`The fit took longer than the ${limit} s that one retrieval may take. Use fewer lines or pixels.`)
-    if (now - lastLook < flagEveryMs) return
-    lastLook = now
-    const flag = await readAbortFlag(database(), retrieval)
-    if (!flag) throw new NoLongerHeld()
-    if (flag.abortRequested) throw new AbortWanted()
-  }
-}
 
 /** Best effort: if the database is away too, the stale heartbeat has the same effect later. */
 async function giveBack({ retrieval }: ClaimedRetrieval): Promise<void> {

@@ -1,15 +1,16 @@
 import { engineVersion } from '#shared/engine/version'
-import { retrieveFromLines } from '#shared/engine/retrieve/from-lines'
-import { retrieveFromSpectrum } from '#shared/engine/retrieve/from-spectrum'
 import type { RetrievalResult } from '#shared/engine/types'
 import type { FieldProblem } from '#shared/types/error-codes'
+import type { LineList } from '#shared/types/line-list'
 import type { Provenance } from '#shared/types/retrieval'
 import { DomainError } from '#shared/utils/domain-error'
-import { prepareFromSpectrum } from '#shared/utils/retrieval/from-spectrum'
-import { prepareFromTable } from '#shared/utils/retrieval/from-table'
+import type { FitAnswer } from '#shared/utils/retrieval/fit'
+import { config } from '../../config'
 import type { ClaimedRetrieval } from '../../database/retrievals/claim'
+import { threads } from '../../threads/index'
+import type { RunOptions } from '../../threads/pool'
 import { getLineList } from '../line-lists/index'
-import { loadSpectrumForFit } from '../spectra/load-for-fit'
+import { loadSpectrumBytes } from '../spectra/load-for-fit'
 import { contentHash } from './hash'
 
 export interface FitOutcome {
@@ -18,48 +19,38 @@ export interface FitOutcome {
   result: RetrievalResult | null
   provenance: Provenance | null
 }
-type Checkpoint = () => Promise<void>
 
 /**
- * Fits one claimed retrieval; `checkpoint` is passed between the stages and may throw.
+ * Fits one claimed retrieval in a thread; the signal ends it with its reason.
  * A fit without a temperature is an ERROR with its reason, and keeps its result, so that the lines can be looked at.
  */
-export async function runFit(claimed: ClaimedRetrieval, checkpoint: Checkpoint): Promise<FitOutcome> {
+export async function runFit(claimed: ClaimedRetrieval, signal: AbortSignal): Promise<FitOutcome> {
   const { retrieval } = claimed
-  await checkpoint()
-  const { result, inputSha256 } = retrieval.lineTable
-    ? await fitTable(claimed, checkpoint)
-    : await fitSpectrum(claimed, checkpoint)
-  await checkpoint()
+  const lineList = await lineListOf(retrieval.lineTable?.lineList ?? retrieval.settings.lineList)
+  const options = { lineList, seconds: config().limits.fitSeconds, signal }
+  const { answer, inputSha256 } = retrieval.lineTable ? await fitTable(claimed, options) : await fitSpectrum(claimed, options)
+  if (answer.problems) throw cannotPrepare(answer.problems)
+  const { result } = answer
   const failed = result.temperature === null
   return {
     phase: failed ? 'ERROR' : 'COMPLETED',
     reason: failed ? result.reason ?? 'No temperature could be found.' : null,
     result: withoutPicture(result),
-    provenance: await provenanceOf(claimed, result, inputSha256),
+    provenance: provenanceOf(claimed, result, lineList, inputSha256),
   }
 }
 
-interface Fitted { result: RetrievalResult, inputSha256: string }
+interface Fitted { answer: FitAnswer, inputSha256: string }
 
-async function fitTable({ retrieval }: ClaimedRetrieval, checkpoint: Checkpoint): Promise<Fitted> {
-  const { lineTable, settings } = retrieval
+async function fitTable({ retrieval: { lineTable, settings } }: ClaimedRetrieval, options: RunOptions): Promise<Fitted> {
   if (!lineTable) throw new DomainError('validation_failed', 'This retrieval has neither a spectrum nor a line table.')
-  const prepared = prepareFromTable({ table: lineTable, settings, lineList: await lineListOf(lineTable.lineList ?? settings.lineList) })
-  if ('problem' in prepared) throw cannotPrepare(prepared.problem)
-  await checkpoint()
-  return { result: retrieveFromLines(prepared.input), inputSha256: contentHash(lineTable) }
+  return { answer: await threads().run('fitTable', { table: lineTable, settings }, options), inputSha256: contentHash(lineTable) }
 }
 
-async function fitSpectrum({ retrieval }: ClaimedRetrieval, checkpoint: Checkpoint): Promise<Fitted> {
-  const { spectrumId, settings } = retrieval
+async function fitSpectrum({ retrieval: { spectrumId, settings } }: ClaimedRetrieval, options: RunOptions): Promise<Fitted> {
   if (!spectrumId) throw new DomainError('validation_failed', 'This retrieval has neither a spectrum nor a line table.')
-  const spectrum = await loadSpectrumForFit(spectrumId)
-  await checkpoint()
-  const prepared = prepareFromSpectrum({ spectrum, settings, lineList: await lineListOf(settings.lineList) })
-  if ('problem' in prepared) throw cannotPrepare(prepared.problem)
-  await checkpoint()
-  return { result: retrieveFromSpectrum(prepared.input), inputSha256: spectrum.sha256 }
+  const { bytes, name, about, sha256 } = await loadSpectrumBytes(spectrumId)
+  return { answer: await threads().run('fitSpectrum', { bytes, name, about, settings }, options), inputSha256: sha256 }
 }
 
 const lineListOf = async (id: string | null | undefined) => id ? getLineList(id) : null
@@ -73,8 +64,7 @@ function withoutPicture(result: RetrievalResult): RetrievalResult {
   return { ...result, spectrum: { ...result.spectrum, picture: { wavelength: [], values: [], model: [], continuum: [] } } }
 }
 
-async function provenanceOf({ retrieval }: ClaimedRetrieval, result: RetrievalResult, inputSha256: string): Promise<Provenance> {
-  const lineList = await lineListOf(retrieval.lineTable?.lineList ?? retrieval.settings.lineList)
+function provenanceOf({ retrieval }: ClaimedRetrieval, result: RetrievalResult, lineList: LineList | null, inputSha256: string): Provenance {
   return {
     engineVersion,
     lineList: lineList?.id ?? null,

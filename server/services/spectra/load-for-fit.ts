@@ -16,6 +16,14 @@ export async function readStored(row: SpectrumRow): Promise<ReadSpectrum> {
   return outcome.spectrum
 }
 
+/** The original bytes with what is known of them. */
+export async function loadSpectrumBytes(spectrumId: string): Promise<{ bytes: Uint8Array, name: string, about: SpectrumAbout, sha256: string }> {
+  const found = await findSpectrumById(database(), spectrumId)
+  if (!found) throw new DomainError('not_found', 'There is no such spectrum.')
+  const { campaignId, name, about, sha256 } = found.spectrum
+  return { bytes: await storage().read(campaignId, sha256), name, about, sha256 }
+}
+
 /** On rising vacuum nm, as the engine takes it. Throws `incomplete_spectrum` while unit or medium are not known. */
 export async function loadSpectrumForFit(spectrumId: string): Promise<SpectrumForFit> {
   const found = await findSpectrumById(database(), spectrumId)

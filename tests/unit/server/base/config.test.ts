@@ -9,7 +9,7 @@ const complete = {
 
 describe('the environment', () => {
   it('has a default for everything but the three services', () => {
-    expect(readConfig(complete)).toMatchObject({ role: 'web', origin: 'http://127.0.0.1:4310', instance: 'main', workerConcurrency: 2, trustProxy: false })
+    expect(readConfig(complete)).toMatchObject({ role: 'web', origin: 'http://127.0.0.1:4310', instance: 'main', workerConcurrency: 4, trustProxy: false })
   })
 
   it('takes the limits of the contract when none are set', () => {
