@@ -1,5 +1,6 @@
 import * as z from 'zod'
 import { observables } from '../engine/types'
+import { observationTimeSchema } from './observation-time'
 
 const finite = z.number()
 /** One line of a submitted table: by label from a line list, or with its molecular data inline. */
@@ -32,7 +33,7 @@ export const lineTableSchema = z.strictObject({
   signalIn: z.enum(['photons', 'energy']).optional(),
   /** Where and when the lines were observed, for series and pages. */
   name: z.string().trim().min(1).max(200).optional(),
-  observedAt: z.iso.datetime({ offset: true }).optional(),
+  observedAt: observationTimeSchema.optional(),
   station: z.string().trim().min(1).max(64).optional(),
   instrument: z.string().trim().min(1).max(64).optional(),
 })

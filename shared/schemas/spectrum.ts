@@ -1,4 +1,5 @@
 import * as z from 'zod'
+import { observationTimeSchema } from './observation-time'
 import { airFormulas, axisMedia, axisUnits, valueKinds } from '../types/spectrum'
 
 const column = z.int().min(0).max(63)
@@ -12,7 +13,7 @@ export const spectrumAboutSchema = z.strictObject({
   valueKind: z.enum(valueKinds, { message: `valueKind is one of ${valueKinds.join(', ')}.` }).nullable(),
   valueUnit: shortText.nullable(),
   columns: z.strictObject({ axis: column, values: column, sigma: column.nullable() }).nullable(),
-  observedAt: z.iso.datetime({ offset: true, message: 'observedAt is a time such as 2011-12-16T08:55:07.141Z.' }).nullable(),
+  observedAt: observationTimeSchema.nullable(),
   exposureSeconds: z.number().positive().max(1e7).nullable(),
   station: shortText.nullable(),
   instrument: shortText.nullable(),

@@ -49,7 +49,16 @@ function axisLength(header: FitsHeader, keyword: string): number {
 function dataBytes(header: FitsHeader, shape: number[]): number {
   if (shape.length === 0) return 0
   const elements = shape.reduce((product, length) => product * length, 1)
-  return Math.abs(bitpixOf(header)) / 8 * (numberOf(header, 'GCOUNT') ?? 1) * ((numberOf(header, 'PCOUNT') ?? 0) + elements)
+  const size = Math.abs(bitpixOf(header)) / 8 * countOf(header, 'GCOUNT', 1) * (countOf(header, 'PCOUNT', 0) + elements)
+  if (!Number.isSafeInteger(size)) throw new FormatError('fits_header', `The FITS header asks for an image of ${shape.join(' x ')}, which no file can hold. Write the file again with a program that follows the standard.`, 'NAXIS')
+  return size
+}
+
+/** A negative count would lead backwards through the file. */
+function countOf(header: FitsHeader, keyword: 'GCOUNT' | 'PCOUNT', fallback: number): number {
+  const count = numberOf(header, keyword) ?? fallback
+  if (!Number.isInteger(count) || count < fallback) throw new FormatError('fits_header', `${keyword} = ${count} is not valid in a FITS header. Write the file again with a program that follows the standard.`, keyword)
+  return count
 }
 
 function bitpixOf(header: FitsHeader): number {

@@ -1,3 +1,4 @@
+import { FormatError } from '../format-error'
 import { numberOf } from './header'
 import type { FitsImage } from './find-image'
 
@@ -6,6 +7,7 @@ export function readPixels(bytes: Uint8Array, image: FitsImage): Float64Array {
   const view = new DataView(bytes.buffer, bytes.byteOffset + image.header.dataStart)
   const stored = storedReader(view, image.bitpix)
   const scale = numberOf(image.header, 'BSCALE') ?? 1
+  if (scale === 0) throw new FormatError('fits_header', 'BSCALE = 0 makes every pixel the same. Mend the card; without scaling it is 1.', 'BSCALE')
   const zero = numberOf(image.header, 'BZERO') ?? 0
   const blank = image.bitpix > 0 ? numberOf(image.header, 'BLANK') : null
   const values = new Float64Array(image.length)

@@ -1,10 +1,10 @@
-import { checkPixelCount } from '../check-columns'
+import { checkAxis, checkPixelCount } from '../check-columns'
 import { FormatError } from '../format-error'
 import type { FormatReading } from '../format-reading'
 import { readAxis } from './axis'
 import type { FitsImage } from './find-image'
 import { findImage } from './find-image'
-import { textOf } from './header'
+import { mildly, textOf } from './header'
 import { readObservation } from './observation'
 import { readPixels } from './pixels'
 
@@ -14,6 +14,8 @@ export function readFits(bytes: Uint8Array): FormatReading {
   const pixels = readPixels(bytes, image)
   const { axis, unit, medium, warnings } = readAxis(image)
   const observation = readObservation(image.header)
+  if (!axis.every(Number.isFinite)) throw new FormatError('fits_axis', `The axis leaves the range of numbers: look at CRVAL${image.axisNumber}, CRPIX${image.axisNumber} and the step.`, `CRVAL${image.axisNumber}`)
+  checkAxis(axis, row => `pixel ${row + 1}`)
   const defined = leaveOutUndefined(axis, pixels)
   checkPixelCount(defined.values.length)
   return {
@@ -46,7 +48,7 @@ function leaveOutUndefined(axis: Float64Array, values: Float64Array) {
 /** Words of the header that are no statement by the standard, but help the person who is asked. */
 function hints(image: FitsImage): string[] {
   const n = image.axisNumber
-  const wat = textOf(image.header, `WAT${n}_001`)
+  const wat = mildly(() => textOf(image.header, `WAT${n}_001`), [])
   const comment = image.header.comments.get(`CRVAL${n}`)
   return [...(wat ? [`The header notes WAT${n}_001 = "${wat}"; confirm the unit.`] : []), ...(comment ? [`The header remarks on CRVAL${n}: "${comment}".`] : [])]
 }

@@ -4,6 +4,7 @@ import type { SpectrumAbout } from '../../types/spectrum'
 import { checkAxis, checkPixelCount, checkSigma } from '../check-columns'
 import { FormatError } from '../format-error'
 import type { FormatReading } from '../format-reading'
+import { JsonProblem, parseStrictJson } from '../strict-json'
 import { decodeText } from '../text-table/decode-text'
 
 /** A spectrum from the JSON upload body. Throws `FormatError`. */
@@ -25,16 +26,17 @@ function parseBody(text: string): JsonSpectrum {
   if (parsed.success) return parsed.data
   const issue = parsed.error.issues[0]!
   const where = issue.path.join('.')
-  throw new FormatError('json_invalid', where ? `${where}: ${issue.message}` : issue.message, where || undefined)
+  const message = issue.message.length > 300 ? `${issue.message.slice(0, 300)} ...` : issue.message
+  throw new FormatError('json_invalid', where ? `${where}: ${message}` : message, where || undefined)
 }
 
 function parseJson(text: string): unknown {
   try {
-    return JSON.parse(text)
+    return parseStrictJson(text)
   }
-  catch {
-    const hint = /[^"\w](NaN|-?Infinity)[^"\w]/.test(text) ? ' JSON knows neither NaN nor Infinity: leave those pixels out.' : ''
-    throw new FormatError('json_invalid', `The file starts like JSON but is not valid JSON.${hint}`)
+  catch (error) {
+    if (!(error instanceof JsonProblem)) throw error
+    throw new FormatError('json_invalid', error.path ? `${error.path}: ${error.message}` : `The file starts like JSON but is not valid JSON: ${error.message}`, error.path)
   }
 }
 

@@ -3,7 +3,7 @@ import { FormatError } from '../format-error'
 /** Bytes to text with `\n` line ends. UTF-8, UTF-16 with a byte order mark, else Latin-1; whatever is not plain UTF-8 is said in `warnings`. */
 export function decodeText(bytes: Uint8Array): { text: string, warnings: string[] } {
   const utf16 = utf16Name(bytes)
-  if (utf16) return finish(new TextDecoder(utf16).decode(bytes), [`The file is ${utf16.toUpperCase()} text and was read as such.`])
+  if (utf16) return finish(decodeUtf16(bytes, utf16), [`The file is ${utf16.toUpperCase()} text and was read as such.`])
   refuseNul(bytes)
   try {
     return finish(new TextDecoder('utf-8', { fatal: true }).decode(bytes), [])
@@ -13,10 +13,15 @@ export function decodeText(bytes: Uint8Array): { text: string, warnings: string[
   }
 }
 
-function utf16Name(bytes: Uint8Array): 'utf-16le' | 'utf-16be' | null {
+export function utf16Name(bytes: Uint8Array): 'utf-16le' | 'utf-16be' | null {
   if (bytes[0] === 0xFF && bytes[1] === 0xFE) return 'utf-16le'
   if (bytes[0] === 0xFE && bytes[1] === 0xFF) return 'utf-16be'
   return null
+}
+
+function decodeUtf16(bytes: Uint8Array, encoding: 'utf-16le' | 'utf-16be'): string {
+  if (bytes.length % 2) throw new FormatError('cut_off', 'The file is UTF-16 text and ends within a character: it is cut off. Transfer it again, or save it as UTF-8.', 'end')
+  return new TextDecoder(encoding).decode(bytes)
 }
 
 function refuseNul(bytes: Uint8Array): void {

@@ -1,4 +1,5 @@
 import { FormatError } from '../format-error'
+import { maxNameLength } from '../limits'
 import { axisUnitOf } from '../units'
 import { guessColumns, parseHeading } from './column-names'
 import type { Delimiter } from './delimiter'
@@ -40,13 +41,13 @@ function splitNames(line: string, delimiter: Delimiter, columnCount: number): st
     () => spacedNames(line),
   ]
   for (const split of ways) {
-    const names = split().map(name => name.trim())
+    const names = split().map(name => name.trim().slice(0, maxNameLength))
     if (names.length === columnCount) return names
   }
   return null
 }
 
-const spacedNames = (line: string) => line.replace(/\s+(?=[([{])/g, '').match(/(?:[^\s([{]|\([^)]*\)|\[[^\]]*\]|\{[^}]*\})+/g) ?? []
+const spacedNames = (line: string) => line.replace(/\s+/g, ' ').replace(/ (?=[([{])/g, '').match(/(?:[^\s([{]|\([^)]*\)|\[[^\]]*\]|\{[^}]*\})+/g) ?? []
 
 function namesFromComments(comments: string[], delimiter: Delimiter, columnCount: number): string[] {
   for (const comment of comments.toReversed()) {
@@ -60,7 +61,7 @@ function refuseNumbers(names: string[], line: number): void {
   const column = names.findIndex(isNumberCell)
   if (column < 0) return
   const text = names.findIndex(name => !isNumberCell(name))
-  throw new FormatError('not_a_number', `Line ${line}, column ${text + 1}: "${names[text]}" is not a number, while "${names[column]}" beside it is. Mend the row, or put # before a line that is not data.`, `line ${line}, column ${text + 1}`)
+  throw new FormatError('not_a_number', `Line ${line}, column ${text + 1}: "${names[text]!.slice(0, 40)}" is not a number, while "${names[column]}" beside it is. Mend the row, or put # before a line that is not data.`, `line ${line}, column ${text + 1}`)
 }
 
 /** A heading that clearly names an axis, but not as many columns as the rows have. */

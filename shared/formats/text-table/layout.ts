@@ -1,5 +1,5 @@
 import { FormatError } from '../format-error'
-import { maxColumns } from '../limits'
+import { maxColumns, maxLineLength } from '../limits'
 import type { Delimiter } from './delimiter'
 import { cellsOf, chooseDelimiter, isNumberCell, startsWithNumber } from './delimiter'
 import type { Names } from './header'
@@ -15,6 +15,8 @@ export interface Layout extends Names {
 }
 
 const maxPreamble = 1000
+/** Names stand close to the numbers. */
+const keptComments = 200
 const commentMark = /^[#!%;]+\s*/
 
 export function findLayout(text: string): Layout {
@@ -24,13 +26,22 @@ export function findLayout(text: string): Layout {
   for (let line = 1; start < text.length && preamble.length <= maxPreamble; line++) {
     const end = lineEnd(text, start)
     const content = text.slice(start, end).trim()
-    if (commentMark.test(content)) comments.push(content.replace(commentMark, ''))
+    if (commentMark.test(content)) keepComment(comments, content)
+    else if (content.length > maxLineLength) throw lineTooLong(line, content.length)
     else if (startsWithNumber(content)) return layoutFrom(content, preamble, comments, start, line)
     else if (content) preamble.push({ line, text: content })
     start = end + 1
   }
   throw new FormatError('no_numbers', 'No row of numbers was found. A spectrum is a text table with one row per pixel: axis, value and, if known, sigma.')
 }
+
+function keepComment(comments: string[], content: string): void {
+  if (content.length <= maxLineLength) comments.push(content.replace(commentMark, ''))
+  if (comments.length > keptComments) comments.shift()
+}
+
+export const lineTooLong = (line: number, length: number) =>
+  new FormatError('line_too_long', `Line ${line} has ${length.toLocaleString('en')} characters. A spectrum is a text table with one row per pixel: put each pixel on a line of its own.`, `line ${line}`)
 
 export function lineEnd(text: string, start: number): number {
   const end = text.indexOf('\n', start)

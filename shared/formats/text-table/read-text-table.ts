@@ -34,8 +34,8 @@ export function readTextTable(bytes: Uint8Array, saidColumns?: Columns | null): 
       warnings: [
         ...warnings,
         ...layout.warnings,
-        ...(table.decimalMark === ',' ? ['Commas were read as decimal marks.'] : []),
-        ...(headings[columns.axis]?.conflict ? [`The heading "${headings[columns.axis]!.raw}" names two units; neither was taken.`] : []),
+        ...(table.decimalMark === ',' ? [`Commas were read as decimal marks: the axis begins at ${axis[0]}.`] : []),
+        ...(headings[columns.axis]?.conflict ? [`The heading "${headings[columns.axis]!.raw.slice(0, 60)}" names two units; neither was taken.`] : []),
       ],
     },
     proposedColumns: certain ? null : columns,
@@ -50,7 +50,7 @@ function statedBy(headings: ColumnHeading[], columns: Columns): Partial<Spectrum
   return {
     ...(axis.axisUnit ? { axisUnit: axis.axisUnit } : {}),
     ...(axis.medium ? { medium: axis.medium } : {}),
-    ...(values.unitText ? { valueUnit: values.unitText } : {}),
+    ...(values.unitText ? { valueUnit: values.unitText.slice(0, 64) } : {}),
     ...(valueKind ? { valueKind } : {}),
   }
 }

@@ -1,9 +1,12 @@
 import { FormatError } from '../format-error'
 import { cellsOf, isNotFiniteWord, unquote } from './delimiter'
+import { maxLineLength } from '../limits'
 import type { Layout } from './layout'
+import { lineTooLong } from './layout'
 
 /** Why a cell is no finite number, with the line, the column and what to do. Called on the way out only. */
 export function cellProblem(row: string, cell: string, line: number, column: number, layout: Layout, decimalMark: string): FormatError {
+  if (row.length > maxLineLength) return lineTooLong(line, row.length)
   const count = cellsOf(row, layout.delimiter).length
   const content = unquote(cell).slice(0, 40)
   if (content === '' && count !== layout.columnCount) return raggedRow(row, line, layout)
@@ -21,6 +24,7 @@ export function cellProblem(row: string, cell: string, line: number, column: num
 const isHuge = (content: string) => Math.abs(Number(content)) === Infinity
 
 export function raggedRow(row: string, line: number, layout: Layout): FormatError {
+  if (row.length > maxLineLength) return lineTooLong(line, row.length)
   const count = cellsOf(row, layout.delimiter).length
   const hint = layout.delimiter === ',' && count > layout.columnCount ? ' If the file has decimal commas, separate its columns by semicolons or tabs.' : ''
   return new FormatError('ragged_row', `Line ${line} has ${count} ${count === 1 ? 'column' : 'columns'}, while the first row of numbers (line ${layout.dataLine}) has ${layout.columnCount}. Give every row the same columns.${hint}`, `line ${line}`)

@@ -24,7 +24,7 @@ describe('a text table is read', () => {
   })
 
   it('saying so when commas were decimal marks', () => {
-    expect(readable('500,5;1\n501;2,5\n').spectrum.warnings).toEqual(['Commas were read as decimal marks.'])
+    expect(readable('500,5;1\n501;2,5\n').spectrum.warnings).toEqual(['Commas were read as decimal marks: the axis begins at 500.5.'])
   })
 
   it('when it is UTF-16 with a byte order mark, and says so', () => {
