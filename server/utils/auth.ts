@@ -1,5 +1,6 @@
 import { getHeader, type H3Event } from 'h3'
 import { DomainError } from '#shared/utils/domain-error'
+import { mayOnService, type DoorRight } from '#shared/utils/permissions'
 import type { Actor } from '../services/accounts/actor'
 import { actorFromToken } from '../services/accounts/tokens'
 import { sessionOf } from './session-cookie'
@@ -13,6 +14,13 @@ export async function requireActor(event: H3Event, access: 'read' | 'submit'): P
   if (access === 'submit' && actor.scope !== 'submit') throw new DomainError('insufficient_scope', 'This token may only read; use one with the scope submit.')
   event.context.userId = actor.userId
   return actor
+}
+
+/** What a token never does, and what is for administrators only. */
+export function requireRight(actor: Actor, who: DoorRight): void {
+  if (mayOnService(actor, who)) return
+  if (who !== 'page' && !actor.isAdministrator) throw new DomainError('forbidden', 'This is for administrators of the service.')
+  throw new DomainError('forbidden', 'This is done by hand on a page, not with a token.')
 }
 
 async function actorOf(event: H3Event): Promise<Actor | null> {

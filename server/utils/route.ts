@@ -1,7 +1,8 @@
 import { defineEventHandler, getQuery, getRouterParams, setResponseStatus, type H3Event } from 'h3'
 import type * as z from 'zod'
+import type { DoorRight } from '#shared/utils/permissions'
 import type { Actor } from '../services/accounts/actor'
-import { requireActor } from './auth'
+import { requireActor, requireRight } from './auth'
 import { refuseCrossSite } from './csrf-check'
 import { readJson } from './read-json'
 import { validate } from './validate'
@@ -13,6 +14,8 @@ export type Access = 'public' | 'read' | 'submit'
 
 export interface RouteOptions<A extends Access, P extends Schema, Q extends Schema, B extends Schema> {
   access: A
+  /** Beyond `access`: by hand on a page, or for administrators. What may be done in a campaign is asked by the services. */
+  who?: DoorRight
   params?: P
   query?: Q
   body?: B
@@ -37,6 +40,7 @@ export const defineRoute = <A extends Access, P extends Schema = undefined, Q ex
   handler: (context: RouteContext<A, P, Q, B>) => unknown,
 ) => defineEventHandler(async (event) => {
   const actor = options.access === 'public' ? undefined : await requireActor(event, options.access)
+  if (actor && options.who) requireRight(actor, options.who)
   if (actor?.via !== 'token') refuseCrossSite(event)
   const context = {
     event,

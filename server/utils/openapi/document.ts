@@ -1,5 +1,6 @@
 import * as z from 'zod'
 import { errorStatus } from '#shared/types/error-codes'
+import type { Who } from '#shared/types/roles'
 import type { ApiAnswer, ApiRoute } from './types'
 
 type Json = Record<string, unknown>
@@ -60,10 +61,13 @@ function answer({ description, schema, type = 'application/json' }: ApiAnswer): 
   return { description, content: content(type, schema ? toSchema(schema, 'output') : { type: 'string' }) }
 }
 
+/** Nobody who is signed in is refused these for their role. */
+const openToAccounts = new Set<Who>(['anyone', 'account', 'see', 'export'])
+
 function errorStatuses(route: ApiRoute): number[] {
   const statuses = new Set(route.errors ?? [])
   if (route.access !== 'public') statuses.add(401)
-  if (route.access === 'submit') statuses.add(403)
+  if (route.access === 'submit' || !openToAccounts.has(route.who)) statuses.add(403)
   if (route.path.includes('{')) statuses.add(404)
   if (route.body ?? route.bodies) for (const status of [400, 413, 415, 422]) statuses.add(status)
   if (route.query ?? route.params) statuses.add(422)
@@ -88,6 +92,8 @@ function operation(route: ApiRoute): Json {
     ...requestBody(route),
     responses: responses(route),
     'x-scope': route.access,
+    'x-who': route.who,
+    ...(route.whoForOthers ? { 'x-who-for-others': route.whoForOthers } : {}),
   }
 }
 
@@ -111,7 +117,7 @@ export function openApiDocument(routes: ApiRoute[], origin: string): Json {
     paths,
     components: {
       securitySchemes: {
-        token: { type: 'http', scheme: 'bearer', description: 'An API token of scope read or submit (x-scope names what a call needs).' },
+        token: { type: 'http', scheme: 'bearer', description: 'An API token of scope read or submit (x-scope names what a call needs, x-who for whom it is).' },
         session: { type: 'apiKey', in: 'cookie', name: 'session', description: 'The browser\'s session cookie.' },
       },
       schemas: { Error: toSchema(errorSchema, 'output') },

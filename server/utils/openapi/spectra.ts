@@ -14,29 +14,29 @@ const ofOne = { area: 'spectra', params: spectrumParams } as const
 
 export const spectrumRoutes: ApiRoute[] = [
   {
-    method: 'get', path: '/api/campaigns/{slug}/spectra', area: 'spectra', access: 'read', summary: 'The spectra of a campaign.', params: campaignParams, query: pageQuerySchema,
+    method: 'get', path: '/api/campaigns/{slug}/spectra', area: 'spectra', access: 'read', who: 'see', summary: 'The spectra of a campaign.', params: campaignParams, query: pageQuerySchema,
     answers: { 200: { description: 'A page.', schema: pageSchema(spectrumViewSchema) } },
   },
   {
-    method: 'post', path: '/api/campaigns/{slug}/spectra', area: 'spectra', access: 'submit', summary: 'Upload spectra; each file has its own answer, and the same bytes twice are the same spectrum.', params: campaignParams,
+    method: 'post', path: '/api/campaigns/{slug}/spectra', area: 'spectra', access: 'submit', who: 'upload', summary: 'Upload spectra; each file has its own answer, and the same bytes twice are the same spectrum.', params: campaignParams,
     bodies: { 'multipart/form-data': uploadForm, 'application/json': jsonSpectrumSchema },
     answers: { 207: { description: 'One item a file, in their order.', schema: uploadAnswerSchema } },
   },
   {
-    ...ofOne, method: 'get', path: '/api/spectra/{id}', access: 'read', summary: 'One spectrum: what is known of it and what is missing.',
+    ...ofOne, method: 'get', path: '/api/spectra/{id}', access: 'read', who: 'see', summary: 'One spectrum: what is known of it and what is missing.',
     answers: { 200: { description: 'The spectrum.', schema: spectrumViewSchema } },
   },
   {
-    ...ofOne, method: 'patch', path: '/api/spectra/{id}', access: 'submit', summary: 'Say more about a spectrum.', body: spectrumPatchSchema,
+    ...ofOne, method: 'patch', path: '/api/spectra/{id}', access: 'submit', who: 'upload', whoForOthers: 'revise-any', summary: 'Say more about a spectrum.', body: spectrumPatchSchema,
     answers: { 200: { description: 'The spectrum as it stands now.', schema: spectrumViewSchema } },
     errors: [409],
   },
   {
-    ...ofOne, method: 'get', path: '/api/spectra/{id}/data', access: 'read', summary: 'Its numbers, thinned for a plot with highs and lows kept.', query: spectrumDataQuerySchema,
+    ...ofOne, method: 'get', path: '/api/spectra/{id}/data', access: 'read', who: 'see', summary: 'Its numbers, thinned for a plot with highs and lows kept.', query: spectrumDataQuerySchema,
     answers: { 200: { description: 'In the unit and the order of the file.', schema: spectrumDataSchema } },
   },
   {
-    ...ofOne, method: 'get', path: '/api/spectra/{id}/bytes', access: 'read', summary: 'The bytes as they were uploaded.',
+    ...ofOne, method: 'get', path: '/api/spectra/{id}/bytes', access: 'read', who: 'see', summary: 'The bytes as they were uploaded.',
     answers: { 200: { description: 'The original file.', type: 'application/octet-stream' } },
   },
 ]

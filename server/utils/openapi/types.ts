@@ -1,4 +1,5 @@
 import type * as z from 'zod'
+import type { CampaignAction, Who } from '#shared/types/roles'
 
 export type ApiMethod = 'get' | 'post' | 'patch' | 'put' | 'delete'
 
@@ -17,6 +18,10 @@ export interface ApiRoute {
   summary: string
   area: string
   access: 'public' | 'read' | 'submit'
+  /** Who may do it, in the words of the table of rights. */
+  who: Who
+  /** Where `who` is about one's own: who may do it with what others submitted. */
+  whoForOthers?: CampaignAction
   params?: z.ZodType
   query?: z.ZodType
   body?: z.ZodType

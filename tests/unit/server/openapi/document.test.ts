@@ -1,6 +1,7 @@
 import { readdirSync, readFileSync } from 'node:fs'
 import { join, relative } from 'node:path'
 import { describe, expect, it } from 'vitest'
+import { isDoorRight } from '#shared/utils/permissions'
 import { openApiDocument } from '../../../../server/utils/openapi/document'
 import { apiRoutes } from '../../../../server/utils/openapi/routes'
 
@@ -38,6 +39,8 @@ describe('the OpenAPI document', () => {
       const [call = ''] = callsOf(file)
       const route = apiRoutes.find(({ method, path }) => `${method} ${path}` === call)
       expect([call, /access: '(\w+)'/.exec(source)?.[1]]).toEqual([call, route?.access])
+      const enforced = route && isDoorRight(route.who) ? route.who : undefined
+      expect([call, /who: '([\w-]+)'/.exec(source)?.[1]]).toEqual([call, enforced])
       const status = Number(/status: (\d+)/.exec(source)?.[1] ?? 200)
       expect([call, Object.keys(route?.answers ?? {}).map(Number)]).toEqual([call, expect.arrayContaining([status])])
     }
