@@ -19,7 +19,7 @@ async function mailAbout(subjectPart: string): Promise<Mail> {
 }
 
 async function submitSky(page: Page, campaign: string, recipe: string, name: string): Promise<string> {
-  await page.goto(`${origin}/submit?campaign=${campaign}`)
+  await page.goto(`${origin}/submit?campaign=${campaign}`, { waitUntil: 'networkidle' })
   await page.getByRole('combobox', { name: 'Recipe' }).selectOption(recipe)
   const { readFile } = await import('node:fs/promises')
   await page.locator('input[type=file]').setInputFiles({ name, mimeType: 'application/fits', buffer: await readFile('tests/truth/spectra/nearir_sky_b.fits') })
