@@ -1,3 +1,6 @@
+// The pages know of our routes, and through them of this file, but not of what is declared for the server alone.
+// eslint-disable-next-line @typescript-eslint/triple-slash-reference
+/// <reference path="../types/compute-thread.d.ts" />
 import { availableParallelism } from 'node:os'
 import source from '#compute-thread'
 import { createThreadPool, type ThreadPool } from './pool'

@@ -11,7 +11,7 @@ export interface RunOptions {
   /** Of computing, without the wait for a thread. */
   seconds: number
   /** Ends the computing at once; `run` rejects with its reason. */
-  signal: AbortSignal
+  signal?: AbortSignal
 }
 
 export class ThreadTimeLimit extends Error {}
@@ -72,20 +72,20 @@ export function createThreadPool(source: string, size: number): ThreadPool {
   /** Wherever the job is: in a thread, or waiting for one. */
   function abort(job: Job): void {
     const thread = [...threads].find(one => one.job === job)
-    if (thread) return drop(thread, job.options.signal.reason)
+    if (thread) return drop(thread, job.options.signal?.reason)
     const place = waiting.indexOf(job)
-    if (place >= 0) waiting.splice(place, 1)[0].reject(job.options.signal.reason)
+    if (place >= 0) waiting.splice(place, 1)[0].reject(job.options.signal?.reason)
   }
 
   return {
     run: (task, ask, options) => new Promise((resolve, reject) => {
       const { lineList, signal } = options
-      if (signal.aborted) return reject(signal.reason)
+      if (signal?.aborted) return reject(signal.reason)
       const listening = new AbortController()
       const last = <T>(end: (value: T) => void) => (value: T) => (listening.abort(), end(value))
       const request: ThreadRequest = { task, ask, lineList: lineList && { key: `${lineList.id}@${lineList.version}`, list: lineList } }
       const job: Job = { request, options, resolve: last(resolve) as Job['resolve'], reject: last(reject) }
-      signal.addEventListener('abort', () => abort(job), { once: true, signal: listening.signal })
+      signal?.addEventListener('abort', () => abort(job), { once: true, signal: listening.signal })
       waiting.push(job)
       next()
     }),

@@ -13,6 +13,14 @@ const byStatus: Partial<Record<number, { code: ErrorCode, message: string }>> = 
   415: { code: 'unsupported_media_type', message: 'This content type is not taken here.' },
 }
 
+/** Two requests at once, of which the database let one through. */
+const lostRaces: Record<string, { code: ErrorCode, message: string } | undefined> = {
+  ER_NO_REFERENCED_ROW_2: { code: 'conflict', message: 'What this rests on was deleted meanwhile. Load it again and decide anew.' },
+  ER_ROW_IS_REFERENCED_2: { code: 'conflict', message: 'Something rests on this by now, so that it cannot be deleted.' },
+  ER_LOCK_DEADLOCK: { code: 'dependency_down', message: 'Others changed the same things at the same moment; try again.' },
+  ER_LOCK_WAIT_TIMEOUT: { code: 'dependency_down', message: 'Others were changing the same things; try again.' },
+}
+
 const connectionFaults = new Set(['ECONNREFUSED', 'ECONNRESET', 'ETIMEDOUT', 'EPIPE', 'ENOTFOUND', 'PROTOCOL_CONNECTION_LOST', 'ER_SERVER_SHUTDOWN', 'ER_CON_COUNT_ERROR', 'POOL_CLOSED'])
 
 /** Turns whatever was thrown into what the caller may know. Never a stack, a query or a path. */
@@ -23,6 +31,8 @@ export function toErrorAnswer(error: unknown, requestId: string): ErrorAnswer {
   if (causes.some(cause => codesOf(cause).some(code => connectionFaults.has(code)))) {
     return { ...answer('dependency_down', `A service this needs is not reachable; try again shortly. (request ${requestId})`), unexpected: true }
   }
+  const lost = causes.flatMap(codesOf).map(code => lostRaces[code]).find(Boolean)
+  if (lost) return answer(lost.code, lost.message)
   const inner = causes.map(innerError).find(Boolean)
   if (inner) return { ...answer(inner.code, inner.message), unexpected: errorStatus[inner.code] >= 500 }
   const known = causes.map(cause => byStatus[statusOf(cause)]).find(Boolean)

@@ -1,22 +1,36 @@
 import { getHeader, setResponseHeader, type H3Event } from 'h3'
+import { JsonProblem, parseStrictJson } from '#shared/formats/strict-json'
 import { DomainError } from '#shared/utils/domain-error'
 import { config } from '../config'
+import { refuseEncoded } from './content-encoding'
+
+export const isJsonType = (type: string | undefined): boolean => /^application\/([a-z0-9.-]+\+)?json\s*(;|$)/i.test(type ?? '')
 
 /** Reads a JSON body without ever holding more than the limit in memory. */
-export async function readJson(event: H3Event, limit = config().limits.jsonBytes): Promise<unknown> {
-  const type = getHeader(event, 'content-type') ?? ''
-  const text = (await readBytes(event, limit)).toString('utf8')
+export async function readJson(event: H3Event): Promise<unknown> {
+  const text = textOf(await readBytes(event))
   if (!text.trim()) return {}
-  if (!/^application\/([a-z0-9.-]+\+)?json\s*(;|$)/i.test(type)) throw new DomainError('unsupported_media_type', 'Send the body as application/json.')
+  if (!isJsonType(getHeader(event, 'content-type'))) throw new DomainError('unsupported_media_type', 'Send the body as application/json.')
   try {
-    return JSON.parse(text)
+    return parseStrictJson(text)
   }
   catch (error) {
-    throw new DomainError('bad_request', `The body is not valid JSON: ${(error as Error).message}`)
+    if (!(error instanceof JsonProblem)) throw error
+    throw new DomainError('bad_request', `The body cannot be taken as JSON. ${error.path ? `${error.path}: ` : ''}${error.message}`, error.path ? [{ path: error.path, message: error.message }] : undefined)
   }
 }
 
-async function readBytes(event: H3Event, limit: number): Promise<Buffer> {
+function textOf(bytes: Buffer): string {
+  try {
+    return new TextDecoder('utf-8', { fatal: true }).decode(bytes)
+  }
+  catch {
+    throw new DomainError('bad_request', 'The body is not UTF-8 text, which JSON always is. Save or send it as UTF-8.')
+  }
+}
+
+export async function readBytes(event: H3Event, limit = config().limits.jsonBytes): Promise<Buffer> {
+  refuseEncoded(event.node.req)
   if (Number(getHeader(event, 'content-length') ?? 0) > limit) throw tooLarge(event, limit)
   const chunks: Buffer[] = []
   let size = 0

@@ -2,12 +2,13 @@ import { mkdir, mkdtemp, rm } from 'node:fs/promises'
 import type { IncomingMessage } from 'node:http'
 import { join } from 'node:path'
 import { withStorageErrors } from '../services/storage/storage-error'
+import { refuseEncoded } from './content-encoding'
 import { drain } from './upload/drain'
 import type { UploadLimits } from './upload/limits'
 import { uploadLimits } from './upload/limits'
 import type { ReceivedParts } from './upload/receive-parts'
 import { receiveParts } from './upload/receive-parts'
-import { malformed, notMultipart, requestTooLarge } from './upload/refusals'
+import { noFile, notMultipart, requestTooLarge } from './upload/refusals'
 
 export interface Upload extends ReceivedParts {
   /** Removes the temporary files that were not moved away. Call it in a `finally`. */
@@ -32,6 +33,7 @@ export async function receiveUpload(request: IncomingMessage, options: { folder:
 }
 
 function refuseByHeaders(request: IncomingMessage, limits: UploadLimits): void {
+  refuseEncoded(request)
   if (!/^multipart\/form-data\b/i.test(request.headers['content-type'] ?? '')) throw notMultipart()
   if (Number(request.headers['content-length'] ?? 0) > limits.requestBytes) throw requestTooLarge(limits)
 }
@@ -42,7 +44,7 @@ async function receiveInto(request: IncomingMessage, folder: string, limits: Upl
   const cleanup = () => rm(directory, { recursive: true, force: true })
   try {
     const parts = await receiveParts(request, directory, limits)
-    if (parts.files.length === 0) throw malformed('The form holds no file. Put the files into parts named "files".')
+    if (parts.files.length === 0) throw noFile(parts.fields)
     return { ...parts, cleanup }
   }
   catch (error) {

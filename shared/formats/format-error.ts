@@ -16,4 +16,4 @@ export type FormatErrorCode
     | 'no_numbers' | 'ragged_row' | 'not_a_number' | 'not_finite' | 'decimal_comma'
     | 'columns' | 'too_few_pixels' | 'too_many_pixels' | 'too_many_columns' | 'line_too_long'
     | 'axis_not_monotonic' | 'axis_not_positive' | 'sigma_not_positive'
-    | 'json_invalid' | 'fits_truncated' | 'fits_header' | 'fits_not_one_dimensional' | 'fits_axis' | 'fits_no_image'
+    | 'json_syntax' | 'json_invalid' | 'fits_truncated' | 'fits_header' | 'fits_not_one_dimensional' | 'fits_axis' | 'fits_no_image'

@@ -2,14 +2,14 @@ import type { MissingField, ReadSpectrum, SpectrumAbout } from '../types/spectru
 import type { FormatReading } from './format-reading'
 import { impliesVacuum } from './units'
 
-const unknown: SpectrumAbout = {
+export const nothingSaid: SpectrumAbout = {
   axisUnit: null, medium: null, airFormula: 'ciddor1996', valueKind: null, valueUnit: null, columns: null,
   observedAt: null, exposureSeconds: null, station: null, instrument: null, fullScale: null,
 }
 
 /** What the person says wins; else what the file states. A null or absent answer says nothing. */
 export function mergeAbout(reading: FormatReading, said: Partial<SpectrumAbout>): SpectrumAbout {
-  const about = { ...unknown, columns: reading.proposedColumns, ...spoken(reading.spectrum.stated), ...spoken(said) }
+  const about = { ...nothingSaid, columns: reading.proposedColumns, ...spoken(reading.spectrum.stated), ...spoken(said) }
   if (about.medium === null && impliesVacuum(about.axisUnit)) about.medium = 'vacuum'
   if (reading.spectrum.format !== 'text') about.columns = null
   return about

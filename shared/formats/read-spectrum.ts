@@ -1,4 +1,4 @@
-import type { MissingField, ReadSpectrum, SpectrumAbout } from '../types/spectrum'
+import type { MissingField, ReadSpectrum, SpectrumAbout, SpectrumProblem } from '../types/spectrum'
 import { readFits } from './fits/read-fits'
 import { FormatError } from './format-error'
 import type { FormatReading } from './format-reading'
@@ -8,10 +8,9 @@ import { readTextTable } from './text-table/read-text-table'
 import { foreignFormat } from './foreign-format'
 import { utf16Name } from './text-table/decode-text'
 
-export interface ReadFailure { code: string, message: string, where?: string }
 export type ReadOutcome
   = { ok: true, spectrum: ReadSpectrum, about: SpectrumAbout, missing: MissingField[] }
-    | { ok: false, error: ReadFailure }
+    | { ok: false, error: SpectrumProblem }
 
 /**
  * Reads a spectrum from the bytes of a file, by their content: the extension means nothing. Never throws.
@@ -56,7 +55,7 @@ function isJson(bytes: Uint8Array): boolean {
   return start.startsWith('{') || /^\[\s*[[{"\d-]/.test(start)
 }
 
-function failureOf(error: unknown, fileName: string): ReadFailure {
+function failureOf(error: unknown, fileName: string): SpectrumProblem {
   if (error instanceof FormatError) return { code: error.code, message: error.message, ...(error.where ? { where: error.where } : {}) }
   return { code: 'unreadable', message: `${fileName} could not be read as a spectrum. Send plain text (CSV), a 1-D FITS image or JSON.` }
 }

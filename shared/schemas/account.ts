@@ -1,4 +1,5 @@
 import * as z from 'zod'
+import { lineSchema } from './text'
 import { mailPreferences, tokenScopes } from '../types/roles'
 
 export const emailSchema = z.string().trim().toLowerCase().max(254, 'An e-mail address takes at most 254 characters.')
@@ -8,7 +9,7 @@ export const passwordSchema = z.string()
   .min(12, 'A password takes at least 12 characters; a few words in a row make a good one.')
   .max(200, 'A password takes at most 200 characters.')
 
-const nameSchema = z.string().trim().min(1, 'Enter a name.').max(120, 'A name takes at most 120 characters.')
+const nameSchema = lineSchema('A name', 120, 'Enter a name.')
 
 export const setUpSchema = z.strictObject({
   token: z.string().min(20, 'The set-up link is not complete.').max(200),

@@ -2,10 +2,11 @@ import * as z from 'zod'
 import { lineTableSchema } from './line-table'
 import { ulidSchema } from './ids'
 import { settingsSchema } from './settings'
+import { textSchema } from './text'
 
 export const maxSpectraPerRequest = 1000
 
-const note = z.string().trim().max(2000).default('')
+const note = textSchema('A note', 2000).default('')
 
 /**
  * Only what the sender says: its defaults are not filled in, so that it can be laid over a recipe.

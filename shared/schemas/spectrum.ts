@@ -1,9 +1,10 @@
 import * as z from 'zod'
 import { observationTimeSchema } from './observation-time'
+import { lineSchema } from './text'
 import { airFormulas, axisMedia, axisUnits, valueKinds } from '../types/spectrum'
 
 const column = z.int().min(0).max(63)
-const shortText = z.string().trim().min(1).max(64)
+const shortText = lineSchema('This', 64)
 
 /** What a person says about one spectrum or about all of an upload; whatever is left out is taken from the file or asked. */
 export const spectrumAboutSchema = z.strictObject({
@@ -33,7 +34,7 @@ function numbersSchema(what: string) {
 
 /** The JSON body of a spectrum upload. */
 export const jsonSpectrumSchema = z.strictObject({
-  name: z.string().trim().min(1, 'A spectrum needs a name.').max(200),
+  name: lineSchema('A name', 200, 'A spectrum needs a name.'),
   axis: numbersSchema('axis'),
   values: numbersSchema('values'),
   sigma: numbersSchema('sigma').nullable().optional(),

@@ -1,3 +1,4 @@
+import type { SpectrumView } from '../schemas/spectrum-view'
 import type { Phase } from './phases'
 import type { RetrievalRow } from './retrieval'
 
@@ -7,6 +8,8 @@ export interface Desk {
   running: { items: RetrievalRow[], total: number }
   /** My drafts and those that wait for me to complete them. */
   waitingForMe: { items: RetrievalRow[], total: number }
+  /** My files that cannot be read, kept to be mended. */
+  needsMending: { items: SpectrumView[], total: number }
   /** My retrievals that ended during the last seven days; where none did, those of others in the campaigns that I review. */
   cameBack: { items: RetrievalRow[], total: number }
   cameBackTo: 'me' | 'campaigns'

@@ -3,7 +3,7 @@ import type { RetrievalSettings } from '../schemas/settings'
 import type { LineTable } from '../schemas/line-table'
 import type { CampaignRole } from './roles'
 import type { Phase } from './phases'
-import type { SpectrumAbout } from './spectrum'
+import type { SpectrumAbout, SpectrumProblem } from './spectrum'
 
 /** What a number rests on: enough to make it again. */
 export interface Provenance {
@@ -48,7 +48,7 @@ export interface RetrievalDetail extends RetrievalRow {
   settings: RetrievalSettings
   /** Exactly one of the two. */
   lineTable: LineTable | null
-  spectrum: { id: string, name: string, sha256: string, format: string, pixelCount: number, about: SpectrumAbout, missing: string[] } | null
+  spectrum: { id: string, name: string, sha256: string, format: string, pixelCount: number, about: SpectrumAbout, missing: string[], problem: SpectrumProblem | null, version: number } | null
   /** Without `spectrum.picture`: see `GET /api/retrievals/{id}/picture`. */
   result: RetrievalResult | null
   provenance: Provenance | null

@@ -27,9 +27,17 @@ export interface SpectrumAbout {
   fullScale: number | null
 }
 
+export const spectrumFormats = ['text', 'fits', 'json'] as const
+export type SpectrumFormat = (typeof spectrumFormats)[number]
+
+/** Why the bytes of a file could not be read, what to do, and where in the file. */
+export interface SpectrumProblem { code: string, message: string, where?: string }
+
 /** A spectrum as read from bytes: numbers as in the file, order as in the file. */
 export interface ReadSpectrum {
-  format: 'text' | 'fits' | 'json'
+  format: SpectrumFormat
+  /** What the file calls itself, where its format has a place for that. */
+  name?: string
   axis: Float64Array
   values: Float64Array
   sigma: Float64Array | null

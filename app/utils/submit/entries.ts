@@ -1,4 +1,4 @@
-import { missingFields } from '#shared/formats/merge-about'
+import { missingFields, nothingSaid } from '#shared/formats/merge-about'
 import { impliesVacuum } from '#shared/formats/units'
 import type { MissingField, SpectrumAbout } from '#shared/types/spectrum'
 
@@ -48,15 +48,10 @@ export function knownAbout(entry: Pick<FileEntry, 'read' | 'answers' | 'common'>
 const spoken = (stated: Partial<SpectrumAbout> = {}): Partial<SpectrumAbout> =>
   Object.fromEntries(Object.entries(stated).filter(([, value]) => value !== null && value !== undefined))
 
-const nothingKnown: SpectrumAbout = {
-  axisUnit: null, medium: null, airFormula: 'ciddor1996', valueKind: null, valueUnit: null, columns: null,
-  observedAt: null, exposureSeconds: null, station: null, instrument: null, fullScale: null,
-}
-
 /** What still has to be asked, in the order of asking, by the same rule as the service. */
 export function missingOf(entry: Pick<FileEntry, 'read' | 'answers' | 'common'>): MissingField[] {
   if (!entry.read) return []
-  const about = { ...nothingKnown, ...knownAbout(entry) }
+  const about = { ...nothingSaid, ...knownAbout(entry) }
   if (about.medium === null && impliesVacuum(about.axisUnit)) about.medium = 'vacuum'
   return missingFields(about, entry.read.format !== 'text' || about.columns !== null)
 }

@@ -23,9 +23,10 @@ export async function requestAbort(db: Queryable, target: Target, reason: string
   return affectedRows === 1
 }
 
-export async function queueDraft(db: Queryable, target: Target): Promise<boolean> {
+/** `latest`: what is known of its spectrum by now. */
+export async function queueDraft(db: Queryable, target: Target, latest: Partial<Pick<typeof retrievals.$inferInsert, 'name' | 'observedAt' | 'stationId' | 'instrumentId'>>): Promise<boolean> {
   const [{ affectedRows }] = await db.update(retrievals)
-    .set({ phase: 'QUEUED', reason: null, queuedAt: databaseNow, dispatchedAt: databaseNow })
+    .set({ ...latest, phase: 'QUEUED', reason: null, queuedAt: databaseNow, dispatchedAt: databaseNow })
     .where(inPhase(target, ['PENDING', 'HELD']))
   return affectedRows === 1
 }

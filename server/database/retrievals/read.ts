@@ -39,7 +39,7 @@ export const findReviews = (db: Queryable, retrievalId: string) =>
 /** What a submission must know of each spectrum it names. */
 export const findSpectraForSubmission = (db: Queryable, campaignId: string, ids: string[]) =>
   db.select({
-    id: spectra.id, name: spectra.name, missing: spectra.missing, observedAt: spectra.observedAt,
+    id: spectra.id, name: spectra.name, missing: spectra.missing, problem: spectra.problem, observedAt: spectra.observedAt,
     stationId: spectra.stationId, instrumentId: spectra.instrumentId,
   }).from(spectra).where(and(eq(spectra.campaignId, campaignId), inArray(spectra.id, ids)))
 

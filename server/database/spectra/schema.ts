@@ -1,5 +1,5 @@
 import { bigint, double, index, int, mysqlEnum, mysqlTable, uniqueIndex, varchar } from 'drizzle-orm/mysql-core'
-import type { MissingField, SpectrumAbout } from '../../../shared/types/spectrum'
+import type { MissingField, SpectrumAbout, SpectrumProblem } from '../../../shared/types/spectrum'
 import { users } from '../accounts/schema'
 import { campaigns, instruments, stations } from '../campaigns/schema'
 import { timestampColumn, trustedJsonColumn, ulidColumn } from '../columns'
@@ -14,7 +14,8 @@ export const spectra = mysqlTable('spectra', {
   name: varchar({ length: 200 }).notNull(),
   sha256: varchar({ length: 64 }).notNull(),
   byteCount: bigint({ mode: 'number' }).notNull(),
-  format: mysqlEnum(['text', 'fits', 'json']).notNull(),
+  /** unknown: the bytes could not be read. */
+  format: mysqlEnum(['text', 'fits', 'json', 'unknown']).notNull(),
   pixelCount: int().notNull(),
   /** nm in vacuum when the axis is known, for lists. */
   wavelengthFrom: double(),
@@ -22,6 +23,8 @@ export const spectra = mysqlTable('spectra', {
   about: trustedJsonColumn<SpectrumAbout>().notNull(),
   missing: trustedJsonColumn<MissingField[]>().notNull(),
   warnings: trustedJsonColumn<string[]>().notNull(),
+  /** Why the bytes cannot be read; the row waits for its owner to mend, replace or delete them. */
+  problem: trustedJsonColumn<SpectrumProblem>(),
   observedAt: timestampColumn(),
   createdAt: timestampColumn().notNull(),
   version: int().notNull().default(1),

@@ -1,6 +1,7 @@
 import type { RetrievalSettings } from '#shared/schemas/settings'
 import type { FieldProblem } from '#shared/types/error-codes'
 import type { LineList, LineListBand } from '#shared/types/line-list'
+import { nearLabels } from '#shared/utils/retrieval/near-labels'
 
 /** Does the recipe name only what its line list has? The paths are those of the recipe's form. */
 export function checkSettings(settings: RetrievalSettings, list: LineList | null): FieldProblem[] {
@@ -23,12 +24,12 @@ function withoutList({ bands, lines, strengthSet }: RetrievalSettings): FieldPro
 const unknownBands = (settings: RetrievalSettings, list: LineList): FieldProblem[] =>
   settings.bands.flatMap((id, index) => list.bands.some(band => band.id === id)
     ? []
-    : [{ path: `settings.bands.${index}`, message: `${list.title} has no band ${id}.` }])
+    : [{ path: `settings.bands.${index}`, message: `${list.title} has no band ${id}; near: ${nearLabels(id, list.bands.map(band => band.id)).join(', ')}.` }])
 
 const unknownLines = (settings: RetrievalSettings, bands: LineListBand[]): FieldProblem[] =>
   settings.lines.flatMap((label, index) => bands.some(band => band.lines.some(line => line.label === label))
     ? []
-    : [{ path: `settings.lines.${index}`, message: `None of the chosen bands has a line ${label}.` }])
+    : [{ path: `settings.lines.${index}`, message: `None of the chosen bands has a line ${label}; near: ${nearLabels(label, bands.flatMap(band => band.lines.map(line => line.label))).join(', ')}.` }])
 
 function unknownStrengthSet(settings: RetrievalSettings, list: LineList, bands: LineListBand[]): FieldProblem[] {
   const { strengthSet } = settings

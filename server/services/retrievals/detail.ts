@@ -21,7 +21,7 @@ export async function retrievalDetail(actor: Actor, id: string): Promise<Retriev
     note: retrieval.note,
     settings: retrieval.settings,
     lineTable: retrieval.lineTable,
-    spectrum: spectrum ? { id: spectrum.id, name: spectrum.name, sha256: spectrum.sha256, format: spectrum.format, pixelCount: spectrum.pixelCount, about: spectrum.about, missing: spectrum.missing } : null,
+    spectrum: spectrum ? { id: spectrum.id, name: spectrum.name, sha256: spectrum.sha256, format: spectrum.format, pixelCount: spectrum.pixelCount, about: spectrum.about, missing: spectrum.missing, problem: spectrum.problem, version: spectrum.version } : null,
     result: shown?.result ?? null,
     provenance: shown?.provenance ?? null,
     revisions: revisions.map(({ result, createdBy }) => ({

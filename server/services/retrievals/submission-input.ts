@@ -2,6 +2,7 @@ import type { SubmitRetrievals } from '#shared/schemas/retrieval-submit'
 import type { RetrievalSettings } from '#shared/schemas/settings'
 import type { LineTable } from '#shared/schemas/line-table'
 import type { FieldProblem } from '#shared/types/error-codes'
+import type { SpectrumProblem } from '#shared/types/spectrum'
 import { DomainError } from '#shared/utils/domain-error'
 import { prepareFromTable } from '#shared/utils/retrieval/from-table'
 import { config } from '../../config'
@@ -21,6 +22,8 @@ export interface SubmittedInput {
   instrumentId: string | null
   band: string | null
   missing: string[]
+  /** Why the spectrum's bytes cannot be read. */
+  problem: SpectrumProblem | null
 }
 
 /** Finds and checks what was submitted, in the order given. Refuses what the engine could only refuse later. */
@@ -43,7 +46,7 @@ async function tableInput(campaignId: string, table: LineTable, settings: Retrie
   if (table.station && !place.stationId) refuse([{ path: 'lineTable.station', message: `This campaign has no station ${table.station}.` }])
   if (table.instrument && !place.instrumentId) refuse([{ path: 'lineTable.instrument', message: `This campaign has no instrument ${table.instrument}.` }])
   return {
-    ...place, name: table.name ?? 'Line table', spectrumId: null, lineTable: table, missing: [],
+    ...place, name: table.name ?? 'Line table', spectrumId: null, lineTable: table, missing: [], problem: null,
     observedAt: table.observedAt ? new Date(table.observedAt) : null, band: table.band ?? bandOf(settings),
   }
 }

@@ -1,6 +1,7 @@
 import type { SubmitRetrievals } from '#shared/schemas/retrieval-submit'
 import type { RetrievalSettings } from '#shared/schemas/settings'
 import type { Phase } from '#shared/types/phases'
+import type { SpectrumProblem } from '#shared/types/spectrum'
 import { DomainError } from '#shared/utils/domain-error'
 import { insertBatch } from '../../database/batches/repository'
 import { newId } from '../../database/ids'
@@ -49,9 +50,19 @@ export async function submitRetrievals({ actor, slug, body, idempotencyKey }: Su
 /** A person can answer what is missing at once and is asked to; a script's spectra wait for the owner. */
 function phasesOf(actor: Actor, { hold }: SubmitRetrievals, inputs: SubmittedInput[]): Phase[] {
   if (hold) return inputs.map(() => 'PENDING')
-  const fields = inputs.flatMap(({ missing }, index) => missing.length > 0 ? [{ path: `spectrumIds.${index}`, message: missingWords(missing) }] : [])
-  if (fields.length > 0 && actor.via === 'session') throw new DomainError('incomplete_spectrum', 'Some spectra do not say all that a fit needs; complete them or keep them as drafts.', fields)
-  return inputs.map(({ missing }) => missing.length > 0 ? 'HELD' : 'QUEUED')
+  const waits = inputs.map(waitsFor)
+  const fields = waits.flatMap((message, index) => message ? [{ path: `spectrumIds.${index}`, message }] : [])
+  if (fields.length > 0 && actor.via === 'session') {
+    const unreadable = inputs.some(({ problem }) => problem)
+    throw new DomainError(unreadable ? 'unreadable_spectrum' : 'incomplete_spectrum', unreadable ? 'Some files cannot be read; mend or replace them first.' : 'Some spectra do not say all that a fit needs; complete them or keep them as drafts.', fields)
+  }
+  return waits.map(message => message ? 'HELD' : 'QUEUED')
+}
+
+/** What its owner has to do before it can be fitted, in words; null when nothing. */
+export function waitsFor({ missing, problem }: { missing: string[], problem: SpectrumProblem | null }): string | null {
+  if (problem) return `The file cannot be read. ${problem.message}`.slice(0, 2000)
+  return missing.length > 0 ? missingWords(missing) : null
 }
 
 const words: Record<string, string> = { axisUnit: 'the unit of the axis', medium: 'air or vacuum', valueKind: 'photons or energy', columns: 'which columns to read' }
@@ -59,12 +70,12 @@ export const missingWords = (missing: string[]): string => `Not stated: ${missin
 
 interface Common { campaignId: string, ownerId: string, batchId: string, batchOrder: number, recipeId: string | null, note: string, settings: RetrievalSettings, settingsHash: string, phase: Phase }
 
-function rowOf({ missing, ...input }: SubmittedInput, common: Common): NewRetrieval {
+function rowOf(input: SubmittedInput, common: Common): NewRetrieval {
   const { name, spectrumId, lineTable, observedAt, stationId, instrumentId, band } = input
   const now = new Date()
   const queued = common.phase === 'QUEUED' ? now : null
   return {
     ...common, id: newId(), name, spectrumId, lineTable, observedAt, stationId, instrumentId, band,
-    reason: common.phase === 'HELD' ? missingWords(missing) : null, createdAt: now, queuedAt: queued, dispatchedAt: queued,
+    reason: common.phase === 'HELD' ? waitsFor(input) : null, createdAt: now, queuedAt: queued, dispatchedAt: queued,
   }
 }

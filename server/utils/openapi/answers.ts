@@ -3,6 +3,7 @@ import { flagNames } from '#shared/engine/types'
 import { lineTableSchema } from '#shared/schemas/line-table'
 import { settingsSchema } from '#shared/schemas/settings'
 import { spectrumAboutSchema } from '#shared/schemas/spectrum'
+import { spectrumProblemSchema, spectrumViewSchema } from '#shared/schemas/spectrum-view'
 import { phases } from '#shared/types/phases'
 import { campaignRoles } from '#shared/types/roles'
 
@@ -83,7 +84,7 @@ export const retrievalDetailSchema = retrievalRowSchema.extend({
   note: z.string(),
   settings: settingsSchema,
   lineTable: lineTableSchema.nullable(),
-  spectrum: z.object({ id: z.string(), name: z.string(), sha256: z.string(), format: z.string(), pixelCount: z.int(), about: spectrumAboutSchema, missing: z.array(z.string()) }).nullable(),
+  spectrum: z.object({ id: z.string(), name: z.string(), sha256: z.string(), format: z.string(), pixelCount: z.int(), about: spectrumAboutSchema, missing: z.array(z.string()), problem: spectrumProblemSchema.nullable(), version: z.int() }).nullable(),
   result: resultSchema.nullable(),
   provenance: provenanceSchema.nullable(),
   revisions: z.array(z.object({ revision: z.int(), phase, createdAt: time, createdBy: z.string(), note: z.string(), temperature: number, uNoise: number, comparisonOnly: z.boolean().optional() })),
@@ -112,6 +113,7 @@ const deskList = z.object({ items: z.array(retrievalRowSchema), total: z.int() }
 export const deskSchema = z.object({
   running: deskList,
   waitingForMe: deskList,
+  needsMending: z.object({ items: z.array(spectrumViewSchema), total: z.int() }),
   cameBack: deskList,
   cameBackTo: z.enum(['me', 'campaigns']),
   waitingForMyReview: deskList,

@@ -2,7 +2,7 @@ import type { IncomingMessage } from 'node:http'
 import { Busboy } from '@fastify/busboy'
 import type { BusboyFileStream, BusboyHeaders } from '@fastify/busboy'
 import type { UploadLimits } from './limits'
-import { cutOff, fieldTooLarge, fileTooLarge, malformed, requestTooLarge, tooManyFields, tooManyFiles } from './refusals'
+import { cutOff, encodedPart, fieldTooLarge, fileTooLarge, malformed, requestTooLarge, tooManyFields, tooManyFiles } from './refusals'
 import type { ReceivedFile } from './store-part'
 import { cleanName, storePart } from './store-part'
 
@@ -17,11 +17,12 @@ export async function receiveParts(request: IncomingMessage, directory: string, 
   try {
     await new Promise<void>((resolve, reject) => {
       watchRequest(request, limits, reject)
-      parser.on('file', (field, part, fileName) => {
-        const name = cleanName(fileName, stores.length + 1)
+      parser.on('file', (field, part, fileName, transferEncoding) => {
+        const { name, notes } = cleanName(fileName, stores.length + 1)
+        if (/^(base64|quoted-printable)$/i.test(transferEncoding)) reject(encodedPart(name, transferEncoding))
         part.on('error', () => reject(cutOff())).on('limit', () => reject(fileTooLarge(name, limits)))
         parts.push(part)
-        const store = storePart(part, { field, name, number: stores.length + 1, directory })
+        const store = storePart(part, { field, name, notes, number: stores.length + 1, directory })
         store.catch(reject)
         stores.push(store)
       })

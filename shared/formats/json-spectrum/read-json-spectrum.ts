@@ -10,11 +10,11 @@ import { decodeText } from '../text-table/decode-text'
 /** A spectrum from the JSON upload body. Throws `FormatError`. */
 export function readJsonSpectrum(bytes: Uint8Array): FormatReading {
   const { text, warnings } = decodeText(bytes)
-  const { name: _name, axis, values, sigma, ...about } = parseBody(text)
+  const { name, axis, values, sigma, ...about } = parseBody(text)
   checkPixelCount(axis.length)
   checkLength('values', values, axis)
   if (sigma) checkLength('sigma', sigma, axis)
-  const spectrum = { format: 'json' as const, axis: Float64Array.from(axis), values: Float64Array.from(values), sigma: sigma ? Float64Array.from(sigma) : null, stated: statedOf(about), columnNames: [], warnings }
+  const spectrum = { format: 'json' as const, name, axis: Float64Array.from(axis), values: Float64Array.from(values), sigma: sigma ? Float64Array.from(sigma) : null, stated: statedOf(about), columnNames: [], warnings }
   const place = (row: number) => `item ${row}`
   checkAxis(spectrum.axis, place)
   if (spectrum.sigma) checkSigma(spectrum.sigma, place)
@@ -36,7 +36,7 @@ function parseJson(text: string): unknown {
   }
   catch (error) {
     if (!(error instanceof JsonProblem)) throw error
-    throw new FormatError('json_invalid', error.path ? `${error.path}: ${error.message}` : `The file starts like JSON but is not valid JSON: ${error.message}`, error.path)
+    throw new FormatError('json_syntax', error.path ? `${error.path}: ${error.message}` : `The file starts like JSON but is not valid JSON: ${error.message}`, error.path)
   }
 }
 

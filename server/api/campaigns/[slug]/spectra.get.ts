@@ -1,9 +1,9 @@
 import { campaignParams } from '#shared/schemas/campaign'
-import { pageQuerySchema } from '#shared/schemas/paging'
+import { spectraQuerySchema } from '#shared/schemas/spectrum-view'
 import { listSpectra } from '../../../services/spectra/index'
 import { defineRoute } from '../../../utils/route'
 
 export default defineRoute(
-  { access: 'read', params: campaignParams, query: pageQuerySchema },
+  { access: 'read', params: campaignParams, query: spectraQuerySchema },
   ({ actor, params, query }) => listSpectra(actor, params.slug, query),
 )

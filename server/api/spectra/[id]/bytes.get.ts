@@ -1,6 +1,7 @@
 import { sendStream, setResponseHeaders } from 'h3'
 import { spectrumParams } from '#shared/schemas/spectrum-view'
 import { spectrumBytes } from '../../../services/spectra/index'
+import { attachment } from '../../../utils/attachment'
 import { defineRoute } from '../../../utils/route'
 
 export default defineRoute({ access: 'read', params: spectrumParams }, async ({ event, actor, params }) => {
@@ -8,7 +9,7 @@ export default defineRoute({ access: 'read', params: spectrumParams }, async ({ 
   setResponseHeaders(event, {
     'content-type': 'application/octet-stream',
     'content-length': bytes,
-    'content-disposition': `attachment; filename*=UTF-8''${encodeURIComponent(name)}`,
+    'content-disposition': attachment(name),
   })
   return sendStream(event, stream)
 })

@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { thinnedPixels } from '../../../../server/services/spectra/thin'
+import { thinnedPixels } from '#shared/utils/thin'
 
 describe('thinning a spectrum for a plot', () => {
   it('leaves a short spectrum whole', () => {
