@@ -102,3 +102,18 @@ it('ends at the ends', () => {
   expect([lowerGamma(2, 0), lowerGamma(2, Infinity), upperGamma(2, 0), upperGamma(2, Infinity)]).toEqual([0, 1, 1, 0])
   expect([incompleteBeta(2, 3, 0), incompleteBeta(2, 3, 1)]).toEqual([0, 1])
 })
+
+it('ends quantiles at the range of doubles (truth: leading terms of the tails, chi2 1: x = pi p^2 / 2; t 1: -cot pi p)', () => {
+  expect(chiSquareQuantile(1e-300, 1)).toBe(0)
+  expect(chiSquareQuantile(1e-140, 1) / (Math.PI / 2 * 1e-280)).toBeCloseTo(1, 12)
+  expect(fisherQuantile(1, 3, 1, 1e-300)).toBe(Infinity)
+  expect(studentQuantile(1e-300, 1) / (-1e300 / Math.PI)).toBeCloseTo(1, 12)
+  expect(studentTail(1e200, 1) / (1e-200 / Math.PI)).toBeCloseTo(1, 12)
+  expect(studentQuantile(0.5, 4)).toBe(0)
+})
+
+it('takes the complement of a probability for its digits', () => {
+  expect(chiSquareTail(chiSquareQuantile(1, 5, 1e-250), 5) / 1e-250).toBeCloseTo(1, 10)
+  expect(studentTail(studentQuantile(1, 7, 1e-250), 7) / 1e-250).toBeCloseTo(1, 10)
+  expect(fisherTail(fisherQuantile(1, 4, 9, 1e-250), 4, 9) / 1e-250).toBeCloseTo(1, 10)
+})

@@ -71,3 +71,23 @@ export function qrTransposeTimes(qr: QrFactors, b: ArrayLike<number>): Float64Ar
   }
   return y
 }
+
+/**
+ * Q b.
+ *
+ * @param b length rows
+ * @returns a new array of length rows
+ */
+export function qrTimes(qr: QrFactors, b: ArrayLike<number>): Float64Array {
+  const { rows, columns, packed, heads, factors } = qr
+  const y = Float64Array.from(b)
+  for (let k = columns - 1; k >= 0; k--) {
+    if (factors[k] === 0) continue
+    let dot = heads[k] * y[k]
+    for (let i = k + 1; i < rows; i++) dot += packed[i * columns + k] * y[i]
+    dot *= factors[k]
+    y[k] -= dot * heads[k]
+    for (let i = k + 1; i < rows; i++) y[i] -= dot * packed[i * columns + k]
+  }
+  return y
+}

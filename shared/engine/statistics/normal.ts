@@ -17,6 +17,7 @@ export function normalCoverage(k: number): number {
 export function normalQuantile(p: number): number {
   if (!(p > 0)) return -Infinity
   if (p >= 1) return Infinity
+  if (p === 0.5) return 0
   const tail = Math.min(p, 1 - p)
   const t = Math.sqrt(-2 * Math.log(tail))
   let z = t - (2.515517 + t * (0.802853 + t * 0.010328)) / (1 + t * (1.432788 + t * (0.189269 + t * 0.001308)))

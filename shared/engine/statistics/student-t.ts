@@ -2,6 +2,8 @@ import { fisherQuantile, fisherTail } from './fisher-f'
 
 /** P(t > x) for `dof` degrees of freedom, dof > 0. */
 export function studentTail(x: number, dof: number): number {
+  // Cauchy's distribution: its tails reach where x^2 overflows.
+  if (dof === 1) return Math.atan2(1, x) / Math.PI
   const half = fisherTail(x * x, 1, dof) / 2
   return x >= 0 ? half : 1 - half
 }
@@ -16,9 +18,14 @@ export function studentCoverageFactor(coverage: number, dof: number): number {
   return Math.sqrt(fisherQuantile(coverage, 1, dof))
 }
 
-/** x with P(t <= x) = p; infinite at p = 0 and 1. */
-export function studentQuantile(p: number, dof: number): number {
-  const tail = 2 * Math.min(p, 1 - p)
-  const size = Math.sqrt(fisherQuantile(Math.abs(1 - 2 * p), 1, dof, tail))
-  return p < 0.5 ? -size : size
+/**
+ * x with P(t <= x) = p; infinite at p = 0 and 1.
+ *
+ * @param q 1 - p, given when it is known better than the subtraction gives it
+ */
+export function studentQuantile(p: number, dof: number, q = 1 - p): number {
+  const tail = Math.min(p, q)
+  const size = dof === 1 ? 1 / Math.tan(Math.PI * tail) : Math.sqrt(fisherQuantile(Math.abs(q - p), 1, dof, 2 * tail))
+  if (p === q) return 0
+  return p < q ? -size : size
 }
