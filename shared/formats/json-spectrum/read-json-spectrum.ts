@@ -22,7 +22,9 @@ export function readJsonSpectrum(bytes: Uint8Array): FormatReading {
 }
 
 function parseBody(text: string): JsonSpectrum {
-  const parsed = jsonSpectrumSchema.safeParse(parseJson(text))
+  const body = parseJson(text)
+  if (typeof body !== 'object' || body === null || Array.isArray(body)) throw new FormatError('json_invalid', 'A JSON spectrum is an object such as {"name": "night 12", "axis": [1500.1, 1500.2], "values": [3.1, 3.4], "axisUnit": "nm"}.')
+  const parsed = jsonSpectrumSchema.safeParse(body)
   if (parsed.success) return parsed.data
   const issue = parsed.error.issues[0]!
   const where = issue.path.join('.')

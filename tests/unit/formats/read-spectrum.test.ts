@@ -54,15 +54,15 @@ describe('a JSON spectrum', () => {
     ['with an unknown unit', json({ axisUnit: 'furlong' }), 'json_invalid', 'axisUnit', /one of nm/],
     ['with text among its numbers', json({ values: [1, '2'] }), 'json_invalid', 'values.1', /"2", not a finite number/],
     ['with null among its numbers', json({ values: [1, null] }), 'json_invalid', 'values.1', /null/],
-    ['with an endless number', json().replace('[1,2]', '[1,1e999]'), 'json_invalid', 'values.1', /1e999 is not a finite number/],
-    ['with NaN', json().replace('[1,2]', '[1,NaN]'), 'json_invalid', undefined, /neither NaN nor Infinity/],
+    ['with an endless number', json().replace('[1,2]', '[1,1e999]'), 'json_syntax', 'values.1', /1e999 is not a finite number/],
+    ['with NaN', json().replace('[1,2]', '[1,NaN]'), 'json_syntax', undefined, /neither NaN nor Infinity/],
     ['with fewer values than pixels', json({ values: [1] }), 'ragged_row', 'values', /equally many/],
     ['with a sigma too many', json({ sigma: [1, 1, 1] }), 'ragged_row', 'sigma', /3 numbers and axis has 2/],
     ['with a sigma of zero', json({ sigma: [1, 0] }), 'sigma_not_positive', 'item 1', /greater than zero/],
     ['with a repeated axis value', json({ axis: [500, 500] }), 'axis_not_monotonic', 'item 1', /repeats/],
     ['with one pixel', json({ axis: [500], values: [1] }), 'too_few_pixels', undefined, /at least 2/],
-    ['that is a list', '[1, 2]', 'json_invalid', undefined, /./],
-    ['that breaks off', '{"name": "a", "axis": [1,', 'json_invalid', undefined, /not valid JSON/],
+    ['that is a list', '[1, 2]', 'json_invalid', undefined, /is an object such as/],
+    ['that breaks off', '{"name": "a", "axis": [1,', 'json_syntax', undefined, /not valid JSON/],
   ])('%s is refused', (_, content, code, where, message) => {
     const error = failure(content)
     expect([error.code, error.where]).toEqual([code, where])
