@@ -7,7 +7,7 @@ const files = execFileSync('git', ['ls-files', '--cached', '--others', '--exclud
   .split('\n').filter(file => /\.(ts|vue|mjs)$/.test(file))
 
 /** Open to every server file. */
-const foundation = ['server/config', 'server/logger', 'server/lifecycle', 'server/secrets', 'server/database/ids']
+const foundation = ['server/config', 'server/logger', 'server/lifecycle', 'server/secrets', 'server/database/ids', 'server/version', 'server/metrics']
 
 /** First match decides. `local`: prefixes of project paths; `packages`: npm names; both exact lists of what may pass. */
 const rules = [
@@ -22,6 +22,8 @@ const rules = [
   { from: 'server/mail/', local: ['server/mail/', ...foundation, 'shared/'], packages: ['nodemailer'] },
   { from: 'server/threads/', local: ['server/threads/', 'shared/'], packages: ['esbuild', '#compute-thread'] },
   { from: 'server/services/', local: ['server/services/', 'server/threads/', 'server/database/', 'server/jobs/', 'server/mail/', ...foundation, 'shared/'], not: ['h3', 'bullmq', 'ioredis', 'nodemailer', 'nitropack'] },
+  { from: 'server/version', local: ['package.json'], packages: [] },
+  { from: 'server/metrics', local: foundation, packages: ['prom-client'] },
   { from: 'server/utils/start-up', local: ['server/database/', ...foundation], not: ['bullmq'] },
   { from: 'server/plugins/', local: ['server/', 'shared/'], not: ['bullmq'] },
   { from: 'server/', local: ['server/services/', 'server/utils/', ...foundation, 'shared/'], not: ['drizzle-orm', 'bullmq', 'ioredis', 'mysql2', 'nodemailer'] },

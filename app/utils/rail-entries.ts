@@ -6,3 +6,8 @@ export const railEntries = [
   { to: '/retrievals', label: 'Retrievals', icon: 'retrievals', key: 'r' },
   { to: '/line-lists', label: 'Line lists', icon: 'lists', key: 'l' },
 ] as const
+
+const adminEntry = { to: '/admin', label: 'Admin', icon: 'admin', key: 'a' } as const
+
+/** Administrators have one more. */
+export const railEntriesFor = (user: { isAdministrator: boolean } | null) => user?.isAdministrator ? [...railEntries, adminEntry] : [...railEntries]

@@ -60,3 +60,7 @@ async function connection(): Promise<Redis> {
 
 /** Whether Redis answers now. */
 export const redisAnswers = async (): Promise<boolean> => (await connection()).ping().then(() => true, () => false)
+
+/** What Redis calls itself; null when it does not answer. */
+export const redisVersion = async (): Promise<string | null> =>
+  (await connection()).info('server').then(text => /redis_version:(\S+)/.exec(text)?.[1] ?? null, () => null)

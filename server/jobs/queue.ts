@@ -55,3 +55,13 @@ export async function unknownToQueue(orders: FitRetrieval[]): Promise<FitRetriev
   if (failed?.[0]) throw failed[0]
   return orders.filter((_, index) => answers[index]?.[1] === 0)
 }
+
+const states = ['waiting', 'active', 'delayed', 'failed'] as const
+export interface QueueNumbers { jobs: Record<(typeof states)[number], number>, workers: number }
+
+/** How the queue stands now. Throws when Redis does not answer. */
+export async function queueNumbers(): Promise<QueueNumbers> {
+  const known = readyQueue()
+  const [counts, workers] = await Promise.all([known.getJobCounts(...states), known.getWorkersCount()])
+  return { jobs: Object.fromEntries(states.map(state => [state, counts[state] ?? 0])) as QueueNumbers['jobs'], workers }
+}

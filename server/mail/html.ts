@@ -8,15 +8,19 @@ export const look = {
   mono: '\'Atkinson Hyperlegible Mono\', Consolas, Menlo, monospace',
 }
 
-/** The sheet that every mail of ours is written on. `body` is markup already made safe. */
-export const page = ({ title, body, accountLink }: { title: string, body: string, accountLink: string }): string => `<!doctype html>
+const footer = (accountLink?: string, why?: string): string => accountLink
+  ? `Which mails you get is chosen on <a href="${escapeHtml(accountLink)}" style="color:${look.muted}">your account page</a>.`
+  : escapeHtml(why ?? '')
+
+/** The sheet that every mail of ours is written on. `body` is markup already made safe; `why` stands at the foot of mails that nobody can switch off. */
+export const page = ({ title, body, accountLink, why }: { title: string, body: string, accountLink?: string, why?: string }): string => `<!doctype html>
 <html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width"><title>${escapeHtml(title)}</title></head>
 <body style="margin:0;background:${look.paper};color:${look.ink};font-family:${look.text};font-size:16px;line-height:1.5">
 <table role="presentation" width="100%" cellpadding="0" cellspacing="0"><tr><td align="center" style="padding:28px 16px">
 <table role="presentation" width="560" cellpadding="0" cellspacing="0" style="max-width:560px;width:100%"><tr><td>
 <p style="margin:0 0 20px;font-size:14px;letter-spacing:.04em;color:${look.muted};border-bottom:2px solid ${look.ink};padding-bottom:6px">Trotline</p>
 ${body}
-<p style="margin:32px 0 0;border-top:1px solid ${look.rule};padding-top:12px;font-size:13px;color:${look.muted}">Which mails you get is chosen on <a href="${escapeHtml(accountLink)}" style="color:${look.muted}">your account page</a>.</p>
+<p style="margin:32px 0 0;border-top:1px solid ${look.rule};padding-top:12px;font-size:13px;color:${look.muted}">${footer(accountLink, why)}</p>
 </td></tr></table></td></tr></table></body></html>`
 
 export const paragraph = (text: string, colour = look.ink): string => `<p style="margin:0 0 12px;color:${colour}">${escapeHtml(text)}</p>`

@@ -5,7 +5,8 @@ export interface MailContent {
   subject: string
   text: string
   html: string
-  accountLink: string
+  /** Of mails that are chosen there; without it the mail is one that nobody can switch off. */
+  accountLink?: string
   picture?: { cid: string, content: Buffer }
 }
 export interface Mail extends MailContent {
@@ -24,7 +25,7 @@ const transport = (): Transporter => (opened ??= createTransport({
 export async function sendMail({ to, messageId, subject, text, html, accountLink, picture }: Mail): Promise<void> {
   await transport().sendMail({
     from: config().mailFrom, to, messageId, subject, text, html,
-    list: { unsubscribe: { url: accountLink, comment: 'Mail preferences' } },
+    ...(accountLink ? { list: { unsubscribe: { url: accountLink, comment: 'Mail preferences' } } } : {}),
     attachments: picture ? [{ filename: 'lines.png', content: picture.content, cid: picture.cid, contentType: 'image/png', contentDisposition: 'inline' as const }] : [],
   })
 }

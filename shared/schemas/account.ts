@@ -9,7 +9,7 @@ export const passwordSchema = z.string()
   .min(12, 'A password takes at least 12 characters; a few words in a row make a good one.')
   .max(200, 'A password takes at most 200 characters.')
 
-const nameSchema = lineSchema('A name', 120, 'Enter a name.')
+export const nameSchema = lineSchema('A name', 120, 'Enter a name.')
 
 export const setUpSchema = z.strictObject({
   token: z.string().min(20, 'The set-up link is not complete.').max(200),

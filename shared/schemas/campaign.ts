@@ -1,5 +1,6 @@
 import * as z from 'zod'
 import { campaignRoles } from '../types/roles'
+import { ulidSchema } from './ids'
 
 export const campaignKinds = ['airglow', 'atmosphere', 'interstellar', 'comet', 'laboratory', 'other'] as const
 export type CampaignKind = (typeof campaignKinds)[number]
@@ -46,11 +47,18 @@ export const campaignViewSchema = z.object({
 })
 export type CampaignView = z.output<typeof campaignViewSchema>
 
+export const memberParams = campaignParams.extend({ userId: ulidSchema })
+export const memberChangeSchema = z.strictObject({ role: z.enum(campaignRoles), version: versionSchema })
+export const memberRemovalQuery = z.strictObject({ version: z.coerce.number().pipe(versionSchema) })
+
 export const memberViewSchema = z.object({
   userId: z.string(),
   name: z.string(),
   email: z.string(),
   role: z.enum(campaignRoles),
   since: z.iso.datetime(),
+  /** False while the account is deactivated. */
+  active: z.boolean(),
+  version: z.int(),
 })
 export type MemberView = z.output<typeof memberViewSchema>

@@ -11,6 +11,8 @@ export const errorStatus = {
   not_found: 404,
   method_not_allowed: 405,
   conflict: 409,
+  last_lead: 409,
+  last_administrator: 409,
   stale_version: 409,
   idempotency_mismatch: 409,
   already_finished: 409,

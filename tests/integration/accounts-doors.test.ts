@@ -3,8 +3,8 @@ import { ApiClient, signedIn } from '../helpers/api-client'
 import { apiRoutes, pages } from '../helpers/routes'
 
 const origin = process.env.TROTLINE_TEST_ORIGIN!
-const openRoutes = ['GET /api/health', 'GET /api/openapi.json', 'GET /api/ready', 'POST /api/set-up']
-const openPages = ['app/pages/set-up/[token].vue', 'app/pages/sign-in.vue']
+const openRoutes = ['GET /api/health', 'GET /api/openapi.json', 'GET /api/ready', 'POST /api/invitations/accept', 'POST /api/invitations/look', 'POST /api/set-up']
+const openPages = ['app/pages/invitations/[token].vue', 'app/pages/set-up/[token].vue', 'app/pages/sign-in.vue']
 const nameOf = ({ method, path }: { method: string, path: string }) => `${method} ${path}`
 const body = (method: string): RequestInit & { json?: unknown } => (method === 'GET' || method === 'DELETE' ? { method } : { method, json: {} })
 const codeOf = async (response: Response) => ((await response.json()) as { error: { code: string } }).error.code

@@ -34,3 +34,7 @@ export async function administratorExists(db: Queryable): Promise<boolean> {
   const [row] = await db.select({ id: users.id }).from(users).where(eq(users.isAdministrator, true)).limit(1)
   return row !== undefined
 }
+
+export async function grantAdministration(db: Queryable, id: string): Promise<void> {
+  await db.update(users).set({ isAdministrator: true, version: sql`${users.version} + 1` }).where(and(eq(users.id, id), eq(users.isAdministrator, false)))
+}

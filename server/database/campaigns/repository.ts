@@ -1,10 +1,8 @@
 import { and, asc, eq, gt, inArray, sql } from 'drizzle-orm'
-import { users } from '../accounts/schema'
 import type { Queryable } from '../client'
 import { campaigns, memberships } from './schema'
 
 export type CampaignRow = typeof campaigns.$inferSelect
-export type MembershipRow = typeof memberships.$inferSelect
 
 const ofUser = (userId: string, after: string | null) =>
   and(eq(memberships.userId, userId), after ? gt(campaigns.id, after) : undefined)
@@ -46,15 +44,3 @@ export async function updateCampaign(db: Queryable, { id, version, change }: { i
     .where(and(eq(campaigns.id, id), eq(campaigns.version, version)))
   return answer.affectedRows === 1
 }
-
-const memberColumns = { userId: users.id, name: users.name, email: users.email, role: memberships.role, createdAt: memberships.createdAt }
-
-export const findMembers = (db: Queryable, campaignId: string, { after, limit }: { after: string | null, limit: number }) =>
-  db.select(memberColumns)
-    .from(memberships)
-    .innerJoin(users, eq(users.id, memberships.userId))
-    .where(and(eq(memberships.campaignId, campaignId), after ? gt(users.id, after) : undefined))
-    .orderBy(asc(users.id))
-    .limit(limit)
-
-export const countMembers = (db: Queryable, campaignId: string) => db.$count(memberships, eq(memberships.campaignId, campaignId))

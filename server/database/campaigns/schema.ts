@@ -26,6 +26,7 @@ export const memberships = mysqlTable('memberships', {
   userId: ulidColumn().notNull().references(() => users.id, { onDelete: 'cascade' }),
   role: mysqlEnum(campaignRoles).notNull(),
   createdAt: timestampColumn().notNull(),
+  version: int().notNull().default(1),
 }, t => [primaryKey({ columns: [t.campaignId, t.userId] }), index('memberships_user').on(t.userId)])
 
 export const stations = mysqlTable('stations', {

@@ -4,7 +4,9 @@ import { outbox } from './schema'
 
 export type OutboxRecord = typeof outbox.$inferSelect
 
-export async function insertOutbox(db: Queryable, row: Pick<OutboxRecord, 'id' | 'subjectKey' | 'userId' | 'kind' | 'payload' | 'messageId'>): Promise<void> {
+type NewMail = Pick<OutboxRecord, 'id' | 'subjectKey' | 'kind' | 'payload' | 'messageId'> & ({ userId: string } | { address: string })
+
+export async function insertOutbox(db: Queryable, row: NewMail): Promise<void> {
   const now = new Date()
   await db.insert(outbox).values({ ...row, nextAttemptAt: now, createdAt: now })
 }

@@ -37,7 +37,8 @@ interface NewRevision { settings: RetrievalSettings, settingsHash: string, note:
 export async function startRevision(db: Queryable, target: Target, change: NewRevision): Promise<boolean> {
   const [{ affectedRows }] = await db.update(retrievals)
     .set({
-      ...change, revision: sql`${retrievals.revision} + 1`, phase: 'QUEUED', progress: 0, reason: null, abortRequested: false,
+      ...change, revision: sql`${retrievals.revision} + 1`, phase: 'QUEUED', progress: 0, reason: null, fault: false, abortRequested: false,
+      attemptsBefore: sql`${retrievals.attempt}`,
       dispatch: sql`${retrievals.dispatch} + 1`, dispatchedAt: databaseNow, queuedAt: databaseNow, startedAt: null, finishedAt: null,
     })
     .where(inPhase(target, ['COMPLETED', 'ERROR', 'ABORTED']))

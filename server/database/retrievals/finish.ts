@@ -4,7 +4,7 @@ import { databaseNow } from './clock'
 import { retrievalResults, retrievals } from './schema'
 
 export type NewResult = typeof retrievalResults.$inferInsert
-type Columns = Partial<Pick<typeof retrievals.$inferInsert, 'reason' | 'temperature' | 'uNoise' | 'uSystematic' | 'strengthSet' | 'flagBits' | 'band' | 'verdict'>>
+type Columns = Partial<Pick<typeof retrievals.$inferInsert, 'reason' | 'fault' | 'temperature' | 'uNoise' | 'uSystematic' | 'strengthSet' | 'flagBits' | 'band' | 'verdict'>>
 
 interface Finish {
   id: string

@@ -4,6 +4,7 @@ import type { RetrievalFilter } from '../../../shared/schemas/retrieval-list'
 import { users } from '../accounts/schema'
 import { campaigns, instruments, recipes, stations } from '../campaigns/schema'
 import type { Queryable } from '../client'
+import { containing } from '../containing'
 import { keysetAfter, orderOf, type Keyset } from './keyset'
 import { retrievals } from './schema'
 
@@ -55,9 +56,6 @@ export function filterCondition(campaignIds: string[], filter: RetrievalFilter):
     filter.q ? or(like(retrievals.name, containing(filter.q)), like(retrievals.note, containing(filter.q))) : undefined,
   )
 }
-
-/** % and _ in a search are letters like any other. */
-const containing = (text: string) => `%${text.replace(/[\\%_]/g, '\\$&')}%`
 
 export const idsOfCampaigns = async (db: Queryable, slugs: string[]): Promise<string[]> =>
   slugs.length === 0 ? [] : (await db.select({ id: campaigns.id }).from(campaigns).where(inArray(campaigns.slug, slugs))).map(row => row.id)

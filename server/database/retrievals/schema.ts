@@ -37,6 +37,8 @@ export const retrievals = mysqlTable('retrievals', {
   progress: double().notNull().default(0),
   /** Fencing token: a result is stored only by the attempt that holds it. */
   attempt: int().notNull().default(0),
+  /** Attempts that earlier revisions took. */
+  attemptsBefore: int().notNull().default(0),
   /** Raised by the reconciling task so that a lost job gets a new queue id. */
   dispatch: int().notNull().default(0),
   dispatchedAt: timestampColumn(),
@@ -44,6 +46,8 @@ export const retrievals = mysqlTable('retrievals', {
   abortRequested: boolean().notNull().default(false),
   /** Why it is HELD or ERROR, in words. */
   reason: varchar({ length: 2000 }),
+  /** It is in ERROR through a fault of the service, not of its input: an administrator can have it fitted again. */
+  fault: boolean().notNull().default(false),
   createdAt: timestampColumn().notNull(),
   queuedAt: timestampColumn(),
   startedAt: timestampColumn(),

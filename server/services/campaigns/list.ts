@@ -1,7 +1,7 @@
-import type { CampaignView, MemberView } from '#shared/schemas/campaign'
+import type { CampaignView } from '#shared/schemas/campaign'
 import { pageOf, type PageQuery } from '#shared/schemas/paging'
 import type { Page } from '#shared/types/retrieval'
-import { countCampaignsOfUser, countMembers, findCampaignsOfUser, findMembers } from '../../database/campaigns/repository'
+import { countCampaignsOfUser, findCampaignsOfUser } from '../../database/campaigns/repository'
 import { database } from '../../database/client'
 import type { Actor } from '../accounts/actor'
 import { campaignFor } from './access'
@@ -19,19 +19,4 @@ export async function listCampaigns(actor: Actor, query: PageQuery): Promise<Pag
 export async function readCampaign(actor: Actor, slug: string): Promise<CampaignView> {
   const { campaign, role } = await campaignFor(actor, slug, 'see')
   return campaignView(campaign, role)
-}
-
-export async function listMembers(actor: Actor, slug: string, query: PageQuery): Promise<Page<MemberView>> {
-  const { campaign } = await campaignFor(actor, slug, 'see')
-  const db = database()
-  const [rows, total] = await Promise.all([
-    findMembers(db, campaign.id, { after: query.cursor ?? null, limit: query.limit + 1 }),
-    countMembers(db, campaign.id),
-  ])
-  return pageOf(rows, {
-    limit: query.limit,
-    total,
-    id: row => row.userId,
-    view: ({ createdAt, ...member }) => ({ ...member, since: createdAt.toISOString() }),
-  })
 }

@@ -45,7 +45,14 @@ const deliverOne = (): Promise<'none' | 'sent' | 'later'> => database().transact
 }, { isolationLevel: 'read committed' })
 
 async function mailOf(row: OutboxRecord): Promise<Mail | null> {
-  const user = await findUser(database(), row.userId)
-  const content = user && !user.deactivatedAt ? await writeMail(row) : null
-  return user && content ? { ...content, to: { name: user.name, address: user.email }, messageId: row.messageId } : null
+  const to = await recipientOf(row)
+  const content = to && await writeMail(row)
+  return to && content ? { ...content, to, messageId: row.messageId } : null
+}
+
+/** An address of its own, or the account's as it is now; null when the account is deactivated. */
+async function recipientOf({ userId, address }: OutboxRecord): Promise<Mail['to'] | null> {
+  if (address !== null) return { name: '', address }
+  const user = userId === null ? undefined : await findUser(database(), userId)
+  return user && !user.deactivatedAt ? { name: user.name, address: user.email } : null
 }

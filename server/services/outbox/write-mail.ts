@@ -5,12 +5,18 @@ import { readListed } from '../../database/retrievals/list'
 import { findResult } from '../../database/retrievals/read'
 import { config } from '../../config'
 import { digestMail } from '../../mail/digest'
+import { membershipMail, type MembershipMailFacts } from '../../mail/membership'
 import { resultMail } from '../../mail/result'
+import { standingMail, type Standing } from '../../mail/standing'
 import type { MailContent } from '../../mail/transport'
+import { writeInvitation } from '../invitations/send'
 
 /** The words of a mail, written when it is sent; null when what it speaks of is gone. */
 export async function writeMail({ kind, payload }: Pick<OutboxRecord, 'kind' | 'payload'>): Promise<MailContent | null> {
   if (kind === 'digest') return writeDigest(String(payload.batchId))
+  if (kind === 'invitation') return writeInvitation(String(payload.invitationId), Number(payload.round))
+  if (kind === 'membership') return membershipMail({ ...payload, link: `${config().origin}/campaigns/${payload.slug}` } as MembershipMailFacts)
+  if (kind === 'standing') return standingMail({ standing: payload.standing as Standing, by: String(payload.by), origin: config().origin })
   const [id, revision] = [String(payload.retrievalId), Number(payload.revision)]
   return payload.abortedBy ? writeAborted(id, revision, String(payload.abortedBy)) : writeResult(id, revision)
 }

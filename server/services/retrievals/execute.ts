@@ -43,7 +43,7 @@ const claim = (order: { id: string, revision: number }): Promise<ClaimedRetrieva
 /** What became of it; null when somebody else holds it by now. Only a stopping process throws. */
 async function outcomeOf(claimed: ClaimedRetrieval, stopping: AbortSignal): Promise<FitOutcome | null> {
   if (claimed.retrieval.abortRequested) return aborted
-  if (claimed.retrieval.attempt > maxAttempts) return failed(`The worker stopped ${maxAttempts} times during this fit, so it was set aside. Change its settings or tell the administrator.`)
+  if (attemptsAt(claimed) > maxAttempts) return broken(`The worker stopped ${maxAttempts} times during this fit, so it was set aside. Change its settings or tell the administrator.`)
   const watch = watchOver(claimed, stopping)
   try {
     return await patiently(() => runFit(claimed, watch.signal), stopping)
@@ -53,16 +53,19 @@ async function outcomeOf(claimed: ClaimedRetrieval, stopping: AbortSignal): Prom
     if (error instanceof NoLongerHeld) return null
     if (error instanceof AbortWanted) return aborted
     if (error instanceof ThreadTimeLimit) return failed(`The fit took longer than the ${config().limits.fitSeconds} s that one retrieval may take. Use fewer lines or pixels.`)
-    if (error instanceof DomainError) return failed(error.message)
+    if (error instanceof DomainError) return error.code === 'not_found' ? broken(error.message) : failed(error.message)
     logger.error({ err: error, retrieval: claimed.retrieval.id }, 'fit failed')
-    return failed('The program failed on this input. The fault is in the service\'s log; tell the administrator the id of this retrieval.')
+    return broken('The program failed on this input. The fault is in the service\'s log; tell the administrator the id of this retrieval.')
   }
   finally {
     watch.end()
   }
 }
 
+const attemptsAt = ({ retrieval }: ClaimedRetrieval) => retrieval.attempt - retrieval.attemptsBefore
 const failed = (reason: string): FitOutcome => ({ phase: 'ERROR', reason, result: null, provenance: null })
+/** Through no fault of the input: an administrator can have it fitted again. */
+const broken = (reason: string): FitOutcome => ({ ...failed(reason), fault: true })
 
 /** Best effort: if the database is away too, the stale heartbeat has the same effect later. */
 async function giveBack({ retrieval }: ClaimedRetrieval): Promise<void> {

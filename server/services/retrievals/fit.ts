@@ -18,6 +18,8 @@ export interface FitOutcome {
   reason: string | null
   result: RetrievalResult | null
   provenance: Provenance | null
+  /** The service failed, not the fit. */
+  fault?: boolean
 }
 
 /**

@@ -40,10 +40,11 @@ async function store(tx: Transaction, claimed: ClaimedRetrieval, given: FitOutco
 const wordLeft = async (tx: Transaction, id: string): Promise<string | null> => (await findRetrieval(tx, id))?.reason ?? null
 
 /** What lists show. An aborted revision leaves the columns of the one before. */
-function columnsOf({ phase, reason, result }: FitOutcome) {
+function columnsOf({ phase, reason, result, fault = false }: FitOutcome) {
   if (phase === 'ABORTED') return { reason }
   return {
     reason,
+    fault,
     temperature: result?.temperature?.value ?? null,
     uNoise: result?.temperature?.uNoise ?? null,
     uSystematic: result?.temperature?.uSystematic ?? null,

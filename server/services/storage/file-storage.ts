@@ -1,5 +1,5 @@
 import { randomUUID } from 'node:crypto'
-import { copyFile, mkdir, open, readFile, rename, rm, stat, writeFile } from 'node:fs/promises'
+import { copyFile, mkdir, open, readFile, rename, rm, stat, statfs, writeFile } from 'node:fs/promises'
 import { dirname, join } from 'node:path'
 import type { Storage } from './storage'
 import { withStorageErrors } from './storage-error'
@@ -36,6 +36,8 @@ export function createFileStorage(folder: string): Storage {
       await mkdir(folder, { recursive: true })
       await writeFile(probe, 'ready').finally(() => rm(probe, { force: true }))
     }),
+    // What others than root may fill.
+    space: () => statfs(folder).then(({ bavail, blocks, bsize }) => ({ free: bavail * bsize, total: blocks * bsize }), () => null),
   }
 }
 

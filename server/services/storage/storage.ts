@@ -13,4 +13,6 @@ export interface Storage {
   remove(campaignId: string, sha256: string): Promise<void>
   /** Throws when nothing can be written: for the readiness answer. */
   check(): Promise<void>
+  /** Bytes of the place it is in; null where that is not known. */
+  space(): Promise<{ free: number, total: number } | null>
 }

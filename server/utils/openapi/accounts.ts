@@ -8,7 +8,7 @@ import type { ApiRoute } from './types'
 const time = z.iso.datetime()
 const accountSchema = z.object({ id: z.string(), email: z.string(), name: z.string(), isAdministrator: z.boolean(), mailPreference: z.enum(mailPreferences), createdAt: time, version: z.int() })
 const tokenSchema = z.object({ id: z.string(), name: z.string(), scope: z.enum(tokenScopes), createdAt: time, expiresAt: time.nullable(), lastUsedAt: time.nullable() })
-const checkSchema = z.enum(['ok', 'down'])
+const checkSchema = z.enum(['ok', 'full', 'down'])
 const readySchema = z.object({ status: z.enum(['ready', 'degraded', 'unavailable']), role: z.string(), checks: z.object({ database: checkSchema, schema: checkSchema, storage: checkSchema, redis: checkSchema }) })
 const authPath = z.object({ path: z.string() })
 

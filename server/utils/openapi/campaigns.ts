@@ -1,6 +1,6 @@
 import type * as z from 'zod'
 import type { CampaignAction } from '#shared/types/roles'
-import { campaignCreateSchema, campaignParams, campaignPatchSchema, campaignViewSchema, memberViewSchema } from '#shared/schemas/campaign'
+import { campaignCreateSchema, campaignParams, campaignPatchSchema, campaignViewSchema } from '#shared/schemas/campaign'
 import { instrumentCreateSchema, instrumentViewSchema } from '#shared/schemas/instrument'
 import { pageQuerySchema, pageSchema } from '#shared/schemas/paging'
 import { recipeCreateSchema, recipeViewSchema } from '#shared/schemas/recipe'
@@ -42,7 +42,6 @@ export const campaignRoutes: ApiRoute[] = [
     answers: { 200: { description: 'The campaign as it stands now.', schema: campaignViewSchema } },
     errors: [409],
   },
-  listOf('members', memberViewSchema),
   listOf('stations', stationViewSchema),
   listOf('instruments', instrumentViewSchema),
   listOf('recipes', recipeViewSchema),

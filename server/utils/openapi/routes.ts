@@ -1,11 +1,13 @@
 import { accountRoutes, serviceRoutes } from './accounts'
+import { adminRoutes } from './admin'
 import { campaignRoutes } from './campaigns'
 import { lineListRoutes, logbookRoutes } from './line-lists'
+import { invitationRoutes, memberRoutes } from './members'
 import { retrievalRoutes } from './retrievals'
 import { spectrumRoutes } from './spectra'
 import type { ApiRoute } from './types'
 
 /** Every route of the API; a test compares this with the files of server/api. */
 export const apiRoutes: ApiRoute[] = [
-  ...campaignRoutes, ...spectrumRoutes, ...retrievalRoutes, ...lineListRoutes, ...logbookRoutes, ...accountRoutes, ...serviceRoutes,
+  ...campaignRoutes, ...memberRoutes, ...invitationRoutes, ...spectrumRoutes, ...retrievalRoutes, ...lineListRoutes, ...logbookRoutes, ...accountRoutes, ...adminRoutes, ...serviceRoutes,
 ]
