@@ -29,6 +29,12 @@ export const profileChangeSchema = z.strictObject({
 })
 export type ProfileChange = z.output<typeof profileChangeSchema>
 
+export const passwordChangeSchema = z.strictObject({
+  current: z.string().min(1, 'Enter the present password.').max(200),
+  next: passwordSchema,
+}).refine(({ current, next }) => current !== next, { path: ['next'], message: 'The new password is the old one.' })
+export type PasswordChange = z.output<typeof passwordChangeSchema>
+
 export const newTokenSchema = z.strictObject({
   name: nameSchema,
   scope: z.enum(tokenScopes).default('read'),

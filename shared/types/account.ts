@@ -13,6 +13,16 @@ export interface SessionData { user: SessionUser, expires: string }
 /** `GET /api/me` */
 export interface AccountView extends SessionUser { createdAt: string, version: number }
 
+/** One row of `GET /api/me/devices`: a sign-in that lives. */
+export interface DeviceView {
+  id: string
+  userAgent: string
+  createdAt: string
+  lastSeenAt: string
+  expiresAt: string
+  isThisOne: boolean
+}
+
 /** One row of `GET /api/me/tokens`; the token itself is only in the answer that made it. */
 export interface ApiTokenView {
   id: string

@@ -30,6 +30,10 @@ export async function updateUser(db: Queryable, { id, version, changes }: { id: 
   return result.affectedRows === 1
 }
 
+export async function setPassword(db: Queryable, { id, passwordHash }: { id: string, passwordHash: string }): Promise<void> {
+  await db.update(users).set({ passwordHash, version: sql`${users.version} + 1` }).where(eq(users.id, id))
+}
+
 export async function administratorExists(db: Queryable): Promise<boolean> {
   const [row] = await db.select({ id: users.id }).from(users).where(eq(users.isAdministrator, true)).limit(1)
   return row !== undefined

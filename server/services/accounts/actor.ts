@@ -8,5 +8,7 @@ export interface Actor {
   isAdministrator: boolean
   mailPreference: MailPreference
   via: 'session' | 'token'
+  /** The sign-in that asks; null for a token. */
+  sessionId: string | null
   scope: TokenScope
 }

@@ -27,17 +27,18 @@ export async function resumeSession(sessionId: string): Promise<SignedIn | null>
   if (Date.now() - live.session.lastSeenAt.getTime() > touchAfterMs) {
     touchSession(database(), sessionId).catch((error: Error) => logger.warn({ reason: error.message }, 'last-seen time not stored'))
   }
-  return { sessionId, actor: toActor(live.user), expiresAt: live.session.expiresAt }
+  return { sessionId, actor: toActor(live.user, sessionId), expiresAt: live.session.expiresAt }
 }
 
 export const closeSession = (sessionId: string): Promise<void> => revokeSession(database(), sessionId)
 
-const toActor = (user: UserRow): Actor => ({
+const toActor = (user: UserRow, sessionId: string): Actor => ({
   userId: user.id,
   email: user.email,
   name: user.name,
   isAdministrator: user.isAdministrator,
   mailPreference: user.mailPreference,
   via: 'session',
+  sessionId,
   scope: 'submit',
 })

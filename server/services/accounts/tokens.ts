@@ -16,7 +16,7 @@ export async function actorFromToken(token: string): Promise<Actor> {
   if (found.token.expiresAt && found.token.expiresAt <= new Date()) throw new DomainError('token_expired', 'This API token has expired; make a new one on your account page.')
   noteUse(found.token)
   const { id: userId, email, name, isAdministrator, mailPreference } = found.user
-  return { userId, email, name, isAdministrator, mailPreference, via: 'token', scope: found.token.scope }
+  return { userId, email, name, isAdministrator, mailPreference, via: 'token', sessionId: null, scope: found.token.scope }
 }
 
 function noteUse({ id, lastUsedAt }: ApiTokenRow): void {

@@ -1,5 +1,5 @@
 import * as z from 'zod'
-import { newTokenSchema, profileChangeSchema, setUpSchema } from '#shared/schemas/account'
+import { newTokenSchema, passwordChangeSchema, profileChangeSchema, setUpSchema } from '#shared/schemas/account'
 import { idParams } from '#shared/schemas/ids'
 import { pageSchema } from '#shared/schemas/paging'
 import { mailPreferences, tokenScopes } from '#shared/types/roles'
@@ -8,6 +8,7 @@ import type { ApiRoute } from './types'
 const time = z.iso.datetime()
 const accountSchema = z.object({ id: z.string(), email: z.string(), name: z.string(), isAdministrator: z.boolean(), mailPreference: z.enum(mailPreferences), createdAt: time, version: z.int() })
 const tokenSchema = z.object({ id: z.string(), name: z.string(), scope: z.enum(tokenScopes), createdAt: time, expiresAt: time.nullable(), lastUsedAt: time.nullable() })
+const deviceSchema = z.object({ id: z.string(), userAgent: z.string(), createdAt: time, lastSeenAt: time, expiresAt: time, isThisOne: z.boolean() })
 const checkSchema = z.enum(['ok', 'full', 'down'])
 const readySchema = z.object({ status: z.enum(['ready', 'degraded', 'unavailable']), role: z.string(), checks: z.object({ database: checkSchema, schema: checkSchema, storage: checkSchema, redis: checkSchema }) })
 const authPath = z.object({ path: z.string() })
@@ -33,6 +34,23 @@ export const accountRoutes: ApiRoute[] = [
   {
     method: 'delete', path: '/api/me/tokens/{id}', area: 'account', access: 'submit', who: 'page', summary: 'Remove a token (signed in on a page only).', params: idParams,
     answers: { 204: { description: 'Removed.' } },
+  },
+  {
+    method: 'get', path: '/api/me/devices', area: 'account', access: 'read', who: 'page', summary: 'Where the account is signed in.',
+    answers: { 200: { description: 'All sign-ins that live.', schema: pageSchema(deviceSchema) } },
+  },
+  {
+    method: 'delete', path: '/api/me/devices/{id}', area: 'account', access: 'submit', who: 'page', summary: 'End one sign-in.', params: idParams,
+    answers: { 204: { description: 'Ended.' } },
+  },
+  {
+    method: 'post', path: '/api/me/sign-out-elsewhere', area: 'account', access: 'submit', who: 'page', summary: 'End every sign-in but this one.',
+    answers: { 200: { description: 'Done.', schema: z.object({ ended: z.int() }) } },
+  },
+  {
+    method: 'post', path: '/api/me/password', area: 'account', access: 'submit', who: 'page', summary: 'Change the password; every other sign-in ends.', body: passwordChangeSchema,
+    answers: { 204: { description: 'Changed.' } },
+    errors: [429],
   },
   {
     method: 'post', path: '/api/set-up', area: 'account', access: 'public', who: 'anyone', summary: 'Make the first administrator with the one-time link.', body: setUpSchema,
