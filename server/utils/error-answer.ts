@@ -1,7 +1,8 @@
 import { errorStatus, type ErrorBody, type ErrorCode } from '#shared/types/error-codes'
 import { DomainError } from '#shared/utils/domain-error'
+import { TooManyAttempts } from '../services/accounts/sign-in-limit'
 
-export interface ErrorAnswer { status: number, body: ErrorBody, /** Something of ours broke: log it in full. */ unexpected: boolean }
+export interface ErrorAnswer { status: number, body: ErrorBody, /** Seconds to wait. */ retryAfter?: number, /** Something of ours broke: log it in full. */ unexpected: boolean }
 
 const byStatus: Partial<Record<number, { code: ErrorCode, message: string }>> = {
   400: { code: 'bad_request', message: 'The request cannot be read.' },
@@ -27,7 +28,7 @@ const connectionFaults = new Set(['ECONNREFUSED', 'ECONNRESET', 'ETIMEDOUT', 'EP
 export function toErrorAnswer(error: unknown, requestId: string): ErrorAnswer {
   const causes = causesOf(error)
   const domain = causes.find(cause => cause instanceof DomainError)
-  if (domain) return answer(domain.code, domain.message, { fields: domain.fields, current: domain.current })
+  if (domain) return { ...answer(domain.code, domain.message, { fields: domain.fields, current: domain.current }), ...(domain instanceof TooManyAttempts ? { retryAfter: domain.retryAfter } : {}) }
   if (causes.some(cause => codesOf(cause).some(code => connectionFaults.has(code)))) {
     return { ...answer('dependency_down', `A service this needs is not reachable; try again shortly. (request ${requestId})`), unexpected: true }
   }

@@ -13,6 +13,7 @@ export default async function errorHandler(error: H3Error, event: H3Event): Prom
   // The standard words: the thrown ones may repeat what was asked for.
   setResponseStatus(event, answer.status, STATUS_CODES[answer.status])
   setResponseHeader(event, 'cache-control', 'no-store')
+  if (answer.retryAfter) setResponseHeader(event, 'retry-after', answer.retryAfter)
   if (event.path.startsWith('/api/') || isRenderingErrorPage(event)) return sendJson(event, answer)
   const page = await renderErrorPage(event, answer)
   if (event.handled) return

@@ -11,7 +11,7 @@ export interface Attempt { email: string, address: string }
 /** Thrown with the seconds to wait, for Retry-After. */
 export class TooManyAttempts extends DomainError {
   constructor(public readonly retryAfter: number) {
-    super('rate_limited', `Too many sign-in attempts. Wait ${Math.ceil(retryAfter / 60)} minutes and try again.`)
+    super('rate_limited', `Too many attempts. Wait ${Math.ceil(retryAfter / 60)} minutes and try again.`)
   }
 }
 
