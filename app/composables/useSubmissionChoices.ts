@@ -7,6 +7,9 @@ import { useCampaigns, useInstruments, useRecipes, useStations } from '~/queries
 /** In the place of a recipe: settings of one's own. */
 export const ownSettings = 'own'
 
+/** Nothing is submitted under what is archived. */
+const inUse = <T extends { archivedAt: string | null }>(items: Readonly<Ref<T[]>>) => computed(() => items.value.filter(item => !item.archivedAt))
+
 /** Campaign, recipe, station and instrument of a submission, with what they may be. A lone choice is made at once. */
 export function useSubmissionChoices() {
   const route = useRoute()
@@ -23,7 +26,7 @@ export function useSubmissionChoices() {
   const instruments = useInstruments(campaign)
 
   const open = computed(() => (campaigns.data.value?.items ?? []).filter(item => may(item.role, 'submit') && !item.archivedAt))
-  const newest = computed(() => recipes.data.value.filter(item => item.newest))
+  const newest = computed(() => recipes.data.value.filter(item => item.newest && !item.archivedAt))
 
   watch(open, (list) => { if (!campaign.value && list.length === 1) campaign.value = list[0]!.slug }, { immediate: true })
   watch(campaign, () => { recipe.value = station.value = instrument.value = null })
@@ -46,5 +49,5 @@ export function useSubmissionChoices() {
   }))
   const request = computed(() => (recipe.value === ownSettings ? { settings: own.value } : { recipe: recipe.value ?? undefined }))
 
-  return { campaign, recipe, station, instrument, own, open, newest, stations: stations.data, instruments: instruments.data, status: campaigns.status, error: campaigns.error, settings, common, place, request }
+  return { campaign, recipe, station, instrument, own, open, newest, stations: inUse(stations.data), instruments: inUse(instruments.data), status: campaigns.status, error: campaigns.error, settings, common, place, request }
 }

@@ -1,7 +1,7 @@
 import type { CampaignView, MemberView } from '#shared/schemas/campaign'
-import type { InstrumentCreate, InstrumentView } from '#shared/schemas/instrument'
-import type { RecipeCreate, RecipeView } from '#shared/schemas/recipe'
-import type { StationCreate, StationView } from '#shared/schemas/station'
+import type { InstrumentView } from '#shared/schemas/instrument'
+import type { RecipeView } from '#shared/schemas/recipe'
+import type { StationView } from '#shared/schemas/station'
 import type { Page } from '#shared/types/retrieval'
 
 const all = { limit: 500 }
@@ -36,16 +36,3 @@ export const useMembers = (slug: MaybeRefOrGetter<string | null>) => useCampaign
 export const useRecipes = (slug: MaybeRefOrGetter<string | null>) => useCampaignPart<RecipeView>(slug, 'recipes')
 export const useStations = (slug: MaybeRefOrGetter<string | null>) => useCampaignPart<StationView>(slug, 'stations')
 export const useInstruments = (slug: MaybeRefOrGetter<string | null>) => useCampaignPart<InstrumentView>(slug, 'instruments')
-
-export interface CampaignInput { title: string, kind: string, description: string, slug?: string }
-
-export function useCampaignChanges() {
-  const api = useApi()
-  const post = <T>(address: string, body: object) => api<T>(address, { method: 'POST', body: body as Record<string, unknown> })
-  return {
-    create: (input: CampaignInput) => post<CampaignView>('/api/campaigns', input),
-    createRecipe: (slug: string, input: RecipeCreate) => post<RecipeView>(path(slug, '/recipes'), input),
-    createStation: (slug: string, input: Partial<StationCreate>) => post<StationView>(path(slug, '/stations'), input),
-    createInstrument: (slug: string, input: Partial<InstrumentCreate>) => post<InstrumentView>(path(slug, '/instruments'), input),
-  }
-}

@@ -1,8 +1,8 @@
 import type { StationView } from '#shared/schemas/station'
 import type { Phase } from '#shared/types/phases'
 import type { RetrievalRow } from '#shared/types/retrieval'
+import { nightOf } from '#shared/utils/solar-time'
 import { nightShares, type NightShares } from '~/utils/night-shares'
-import { nightOf } from '~/utils/time-text'
 
 export interface NightCell extends NightShares { night: string }
 export interface StationNights { station: string, nights: NightCell[] }
@@ -20,8 +20,9 @@ function calendar(nights: string[], limit: number): string[] {
 }
 
 /** What came in and what failed, night by night and station by station; nights with nothing stay in as gaps. */
-export function nightStrip(rows: RetrievalRow[], stations: Pick<StationView, 'slug' | 'longitude'>[], limit = 60): StationNights[] {
-  const longitudes = new Map(stations.map(station => [station.slug, station.longitude]))
+export function nightStrip(rows: RetrievalRow[], stations: Pick<StationView, 'name' | 'longitude'>[], limit = 60): StationNights[] {
+  // Rows name their station as people do.
+  const longitudes = new Map(stations.map(station => [station.name, station.longitude]))
   const counts = new Map<string, Map<string, Partial<Record<Phase, number>>>>()
   const seen = new Set<string>()
   for (const row of rows) {

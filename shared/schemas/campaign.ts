@@ -1,35 +1,51 @@
 import * as z from 'zod'
+import { campaignKinds, visibilities } from '../types/campaign'
 import { campaignRoles } from '../types/roles'
+import { lineOfText, longText, slugParam, slugSchema, versionSchema } from './fields'
 import { ulidSchema } from './ids'
 
-export const campaignKinds = ['airglow', 'atmosphere', 'interstellar', 'comet', 'laboratory', 'other'] as const
-export type CampaignKind = (typeof campaignKinds)[number]
+export { slugSchema, versionSchema } from './fields'
+export { campaignKinds, type CampaignKind } from '../types/campaign'
 
-/** The part of an address that names a thing. */
-export const slugSchema = z.string().trim().max(64)
-  .regex(/^[a-z0-9]+(?:-[a-z0-9]+)*$/, 'Use small letters, digits and single hyphens, for example hollow-ridge.')
+export const campaignParams = z.strictObject({ slug: slugParam })
 
-export const versionSchema = z.int().min(1, 'Send the version of the row that you changed.')
+const day = z.iso.date('Enter a date such as 2026-01-14.').nullable()
 
-export const campaignParams = z.strictObject({ slug: z.string().min(1).max(64) })
+const fields = {
+  title: lineOfText('The title', 200),
+  kind: z.enum(campaignKinds, 'Choose what is observed.'),
+  /** First and last day of observations, both inclusive; null: open. */
+  startsOn: day,
+  endsOn: day,
+  description: longText('The description'),
+  /** `members`: nobody else sees it. `service`: every signed-in account reads it. */
+  visibility: z.enum(visibilities, 'Choose who may read it.'),
+  /** May an analyst review a submission of their own? */
+  selfReview: z.boolean(),
+}
+
+const datesInOrder = ({ startsOn, endsOn }: { startsOn: string | null, endsOn: string | null }) => !startsOn || !endsOn || startsOn <= endsOn
+const outOfOrder = { path: ['endsOn'], message: 'The last day is before the first one.' }
+
+/** A whole campaign as its form holds it. */
+export const campaignFormSchema = z.strictObject({ slug: slugSchema, ...fields }).refine(datesInOrder, outOfOrder)
+export type CampaignForm = z.output<typeof campaignFormSchema>
 
 export const campaignCreateSchema = z.strictObject({
+  ...fields,
   /** Left out: made from the title. */
   slug: slugSchema.optional(),
-  title: z.string().trim().min(1, 'A campaign needs a title.').max(200),
-  kind: z.enum(campaignKinds).default('other'),
-  description: z.string().trim().max(20_000).default(''),
-  selfReview: z.boolean().default(false),
-})
+  kind: fields.kind.default('other'),
+  startsOn: day.default(null),
+  endsOn: day.default(null),
+  description: fields.description.default(''),
+  visibility: fields.visibility.default('members'),
+  selfReview: fields.selfReview.default(false),
+}).refine(datesInOrder, outOfOrder)
 export type CampaignCreate = z.output<typeof campaignCreateSchema>
 
-export const campaignPatchSchema = z.strictObject({
-  version: versionSchema,
-  title: z.string().trim().min(1, 'A campaign needs a title.').max(200).optional(),
-  kind: z.enum(campaignKinds).optional(),
-  description: z.string().trim().max(20_000).optional(),
-  selfReview: z.boolean().optional(),
-})
+/** A changed slug keeps the old address working. */
+export const campaignPatchSchema = z.strictObject({ slug: slugSchema, ...fields }).partial().extend({ version: versionSchema })
 export type CampaignPatch = z.output<typeof campaignPatchSchema>
 
 export const campaignViewSchema = z.object({
@@ -37,13 +53,17 @@ export const campaignViewSchema = z.object({
   slug: z.string(),
   title: z.string(),
   kind: z.enum(campaignKinds),
+  startsOn: z.iso.date().nullable(),
+  endsOn: z.iso.date().nullable(),
   description: z.string(),
+  visibility: z.enum(visibilities),
   selfReview: z.boolean(),
   archivedAt: z.iso.datetime().nullable(),
   createdAt: z.iso.datetime(),
   version: z.int(),
-  /** The caller's role in it. */
+  /** The caller's role in it; reader for those who are no member of a campaign that every account may read. */
   role: z.enum(campaignRoles),
+  member: z.boolean(),
 })
 export type CampaignView = z.output<typeof campaignViewSchema>
 

@@ -17,6 +17,7 @@ export const errorStatus = {
   idempotency_mismatch: 409,
   already_finished: 409,
   wrong_phase: 409,
+  archived: 409,
   payload_too_large: 413,
   unsupported_media_type: 415,
   validation_failed: 422,

@@ -5,14 +5,21 @@ import { get, origin, signIn } from './helpers'
 const themes = ['day', 'night', 'dome'] as const
 interface Rows { items: { id: string, batchId: string }[] }
 
+const campaignPages = {
+  'campaign': '', 'stations': '?tab=stations', 'instruments': '?tab=instruments', 'recipes': '?tab=recipes', 'members': '?tab=members', 'campaign logbook': '?tab=logbook', 'campaign settings': '/settings',
+  'station': '/stations/hollow-ridge', 'new station': '/stations/new', 'change of a station': '/stations/hollow-ridge/edit',
+  'instrument': '/instruments/hollow-ridge-grating', 'new instrument': '/instruments/new',
+  'recipe': '/recipes/oh-3-1', 'new recipe': '/recipes/new', 'comparison of recipes': '/recipes/compare?a=oh-3-1@1&b=oh-4-2@1',
+}
+
 async function pagesToCheck(page: Page): Promise<Record<string, string>> {
   const one = async (query: string) => (await get<Rows>(page.request, `/api/retrievals?limit=1&${query}`)).items[0]!
   const done = await one('phase=COMPLETED&campaign=hollow-ridge-winter-nights')
   const failed = await one('phase=ERROR')
   const held = (await get<Rows>(page.request, '/api/retrievals?limit=1&phase=HELD')).items[0]
-  const [campaign] = (await get<{ items: { slug: string }[] }>(page.request, '/api/campaigns')).items
   return {
-    'desk': '/', 'campaigns': '/campaigns', 'campaign': `/campaigns/${campaign!.slug}`, 'new recipe': `/campaigns/${campaign!.slug}/recipes/new`,
+    'desk': '/', 'campaigns': '/campaigns', 'new campaign': '/campaigns/new',
+    ...Object.fromEntries(Object.entries(campaignPages).map(([name, path]) => [name, `/campaigns/hollow-ridge-winter-nights${path}`])),
     'submit': '/submit', 'retrievals': '/retrievals', 'result done': `/retrievals/${done.id}`, 'result failed': `/retrievals/${failed.id}`,
     ...(held ? { 'result held': `/retrievals/${held.id}` } : {}),
     'batch': `/batches/${done.batchId}`, 'line lists': '/line-lists', 'line list': '/line-lists/oh-meinel', 'account': '/account', 'error page': '/retrievals/01ARZ3NDEKTSV4RRFFQ69G5FAV',

@@ -1,10 +1,11 @@
-import { and, asc, eq, gt } from 'drizzle-orm'
+import { and, asc, eq, gt, inArray, isNotNull, sql } from 'drizzle-orm'
 import type { Queryable } from '../client'
 import { instruments, stations } from './schema'
 
 export type StationRow = typeof stations.$inferSelect
 export type InstrumentRow = typeof instruments.$inferSelect
 interface Window { after: string | null, limit: number }
+interface Change<Row> { id: string, version: number, change: Partial<Omit<Row, 'id' | 'campaignId' | 'version'>> }
 
 export const findStations = (db: Queryable, campaignId: string, { after, limit }: Window): Promise<StationRow[]> =>
   db.select().from(stations)
@@ -19,8 +20,20 @@ export async function findStationBySlug(db: Queryable, campaignId: string, slug:
   return row
 }
 
+export async function findStation(db: Queryable, id: string): Promise<StationRow | undefined> {
+  const [row] = await db.select().from(stations).where(eq(stations.id, id))
+  return row
+}
+
 export async function insertStation(db: Queryable, row: typeof stations.$inferInsert): Promise<void> {
   await db.insert(stations).values(row)
+}
+
+/** False when the row is no longer at that version. */
+export async function updateStation(db: Queryable, { id, version, change }: Change<StationRow>): Promise<boolean> {
+  const [{ affectedRows }] = await db.update(stations).set({ ...change, version: sql`${stations.version} + 1` })
+    .where(and(eq(stations.id, id), eq(stations.version, version)))
+  return affectedRows === 1
 }
 
 export const findInstruments = (db: Queryable, campaignId: string, { after, limit }: Window) =>
@@ -38,6 +51,28 @@ export async function findInstrumentBySlug(db: Queryable, campaignId: string, sl
   return row
 }
 
+export async function findInstrument(db: Queryable, id: string): Promise<InstrumentRow | undefined> {
+  const [row] = await db.select().from(instruments).where(eq(instruments.id, id))
+  return row
+}
+
 export async function insertInstrument(db: Queryable, row: typeof instruments.$inferInsert): Promise<void> {
   await db.insert(instruments).values(row)
+}
+
+/** False when the row is no longer at that version. */
+export async function updateInstrument(db: Queryable, { id, version, change }: Change<InstrumentRow>): Promise<boolean> {
+  const [{ affectedRows }] = await db.update(instruments).set({ ...change, version: sql`${instruments.version} + 1` })
+    .where(and(eq(instruments.id, id), eq(instruments.version, version)))
+  return affectedRows === 1
+}
+
+/** Those of the ids, of stations or instruments, that are archived. */
+export async function findArchivedPlaces(db: Queryable, ids: string[]): Promise<{ noun: 'station' | 'instrument', id: string, name: string }[]> {
+  if (ids.length === 0) return []
+  const [archivedStations, archivedInstruments] = await Promise.all([
+    db.select({ id: stations.id, name: stations.name }).from(stations).where(and(inArray(stations.id, ids), isNotNull(stations.archivedAt))),
+    db.select({ id: instruments.id, name: instruments.name }).from(instruments).where(and(inArray(instruments.id, ids), isNotNull(instruments.archivedAt))),
+  ])
+  return [...archivedStations.map(row => ({ noun: 'station' as const, ...row })), ...archivedInstruments.map(row => ({ noun: 'instrument' as const, ...row }))]
 }

@@ -1,30 +1,27 @@
-import { and, asc, eq, gt, inArray, sql } from 'drizzle-orm'
+import { and, asc, count, eq, gt, sql } from 'drizzle-orm'
 import type { Queryable } from '../client'
+import { membershipOf, visibleTo } from './access-queries'
 import { campaigns, memberships } from './schema'
 
 export type CampaignRow = typeof campaigns.$inferSelect
 
-const ofUser = (userId: string, after: string | null) =>
-  and(eq(memberships.userId, userId), after ? gt(campaigns.id, after) : undefined)
-
-export const findCampaignsOfUser = (db: Queryable, userId: string, { after, limit }: { after: string | null, limit: number }) =>
+/** What the account may see; the role is null where it is no member. */
+export const findVisibleCampaigns = (db: Queryable, userId: string, { after, limit }: { after: string | null, limit: number }) =>
   db.select({ campaign: campaigns, role: memberships.role })
     .from(campaigns)
-    .innerJoin(memberships, eq(memberships.campaignId, campaigns.id))
-    .where(ofUser(userId, after))
+    .leftJoin(memberships, membershipOf(userId))
+    .where(and(visibleTo(), after ? gt(campaigns.id, after) : undefined))
     .orderBy(asc(campaigns.id))
     .limit(limit)
 
-export const countCampaignsOfUser = (db: Queryable, userId: string) => db.$count(memberships, eq(memberships.userId, userId))
+export async function countVisibleCampaigns(db: Queryable, userId: string): Promise<number> {
+  const [row] = await db.select({ count: count() }).from(campaigns).leftJoin(memberships, membershipOf(userId)).where(visibleTo())
+  return row?.count ?? 0
+}
 
 export async function findCampaignById(db: Queryable, id: string): Promise<CampaignRow | undefined> {
   const [row] = await db.select().from(campaigns).where(eq(campaigns.id, id))
   return row
-}
-
-export async function findCampaignSlugs(db: Queryable, slugs: string[]): Promise<string[]> {
-  const rows = await db.select({ slug: campaigns.slug }).from(campaigns).where(inArray(campaigns.slug, slugs))
-  return rows.map(row => row.slug)
 }
 
 export async function insertCampaign(db: Queryable, row: typeof campaigns.$inferInsert): Promise<void> {
@@ -35,7 +32,7 @@ export async function insertMembership(db: Queryable, row: typeof memberships.$i
   await db.insert(memberships).values(row)
 }
 
-type CampaignChange = Partial<Pick<CampaignRow, 'title' | 'kind' | 'description' | 'selfReview' | 'archivedAt'>>
+type CampaignChange = Partial<Omit<CampaignRow, 'id' | 'createdAt' | 'version'>>
 
 /** False when the row is no longer at that version. */
 export async function updateCampaign(db: Queryable, { id, version, change }: { id: string, version: number, change: CampaignChange }): Promise<boolean> {

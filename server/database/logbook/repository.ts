@@ -1,4 +1,4 @@
-import { and, asc, eq, gt } from 'drizzle-orm'
+import { and, asc, desc, eq, gt, inArray, lt, type SQL } from 'drizzle-orm'
 import { users } from '../accounts/schema'
 import type { Queryable } from '../client'
 import { newId } from '../ids'
@@ -24,15 +24,20 @@ export async function writeLogbookEntries(db: Queryable, deeds: LogbookDeed[]): 
   await db.insert(logbook).values(deeds.map(deed => ({ ...deed, id: newId(), detail: deed.detail ?? {}, at })))
 }
 
-interface ObjectQuery { objectKind: string, objectId: string, after: string | null, limit: number }
+/** What a page of the logbook is about: some things of one kind, or all of a campaign. */
+export type LogbookScope = { objectKind: string, objectIds: string[] } | { campaignId: string, objectKind: string | null }
+interface Window { after: string | null, limit: number, newestFirst: boolean }
 
-export const findLogbookEntries = (db: Queryable, { objectKind, objectId, after, limit }: ObjectQuery) =>
+const within = (scope: LogbookScope): SQL | undefined => 'campaignId' in scope
+  ? and(eq(logbook.campaignId, scope.campaignId), scope.objectKind === null ? undefined : eq(logbook.objectKind, scope.objectKind))
+  : and(eq(logbook.objectKind, scope.objectKind), inArray(logbook.objectId, scope.objectIds))
+
+export const findLogbookEntries = (db: Queryable, scope: LogbookScope, { after, limit, newestFirst }: Window) =>
   db.select({ entry: logbook, actorName: users.name })
     .from(logbook)
     .leftJoin(users, eq(users.id, logbook.actorId))
-    .where(and(eq(logbook.objectKind, objectKind), eq(logbook.objectId, objectId), after ? gt(logbook.id, after) : undefined))
-    .orderBy(asc(logbook.id))
+    .where(and(within(scope), after ? (newestFirst ? lt : gt)(logbook.id, after) : undefined))
+    .orderBy((newestFirst ? desc : asc)(logbook.id))
     .limit(limit)
 
-export const countLogbookEntries = (db: Queryable, objectKind: string, objectId: string) =>
-  db.$count(logbook, and(eq(logbook.objectKind, objectKind), eq(logbook.objectId, objectId)))
+export const countLogbookEntries = (db: Queryable, scope: LogbookScope) => db.$count(logbook, within(scope))

@@ -56,6 +56,3 @@ export function filterCondition(campaignIds: string[], filter: RetrievalFilter):
     filter.q ? or(like(retrievals.name, containing(filter.q)), like(retrievals.note, containing(filter.q))) : undefined,
   )
 }
-
-export const idsOfCampaigns = async (db: Queryable, slugs: string[]): Promise<string[]> =>
-  slugs.length === 0 ? [] : (await db.select({ id: campaigns.id }).from(campaigns).where(inArray(campaigns.slug, slugs))).map(row => row.id)

@@ -1,24 +1,47 @@
-import type { CampaignPatch, CampaignView } from '#shared/schemas/campaign'
-import { DomainError } from '#shared/utils/domain-error'
+import { campaignFormSchema, type CampaignPatch, type CampaignView } from '#shared/schemas/campaign'
 import { findCampaignById, updateCampaign, type CampaignRow } from '../../database/campaigns/repository'
-import { database } from '../../database/client'
-import { writeLogbook } from '../../database/logbook/repository'
+import { isFormerSlugOfAnother, keepFormerSlug } from '../../database/campaigns/repository-slugs'
+import type { Queryable } from '../../database/client'
+import { isDuplicateEntry } from '../../database/duplicate'
 import type { Actor } from '../accounts/actor'
-import { campaignFor } from './access'
-import { changesBetween } from './changes'
+import { campaignFor, type CampaignAccess } from './access'
+import { changeRow, setArchived, type EditableKind } from './change-row'
+import { refuseProblems } from './refuse-problems'
+import { slugTaken } from './slug'
 import { campaignView } from './view'
 
 export async function changeCampaign(actor: Actor, slug: string, { version, ...wanted }: CampaignPatch): Promise<CampaignView> {
-  const { campaign, role } = await campaignFor(actor, slug, 'edit-campaign')
-  const done = await database().transaction(async (tx) => {
-    const before = await findCampaignById(tx, campaign.id)
-    if (!before || !(await updateCampaign(tx, { id: campaign.id, version, change: wanted }))) return false
-    const detail = changesBetween<CampaignRow>(before, wanted)
-    await writeLogbook(tx, { campaignId: campaign.id, objectKind: 'campaign', objectId: campaign.id, actorId: actor.userId, action: 'change', detail })
-    return true
-  })
-  const now = await findCampaignById(database(), campaign.id)
-  if (!now) throw new DomainError('not_found', 'There is no such campaign.')
-  if (!done) throw new DomainError('stale_version', 'Somebody changed this campaign in the meantime. Look at it as it stands now and change it again.', undefined, campaignView(now, role))
-  return campaignView(now, role)
+  const access = await campaignFor(actor, slug, 'edit-campaign')
+  const { campaign } = access
+  if (version === campaign.version) refuseProblems(campaignFormSchema, { ...formOf(campaign), ...wanted })
+  try {
+    const row = await changeRow(campaigns(access), { actor, campaignId: campaign.id, id: campaign.id }, version, wanted)
+    return campaignView(row, access)
+  }
+  catch (error) {
+    if (wanted.slug && isDuplicateEntry(error)) throw slugTaken(wanted.slug)
+    throw error
+  }
 }
+
+export async function archiveCampaign(actor: Actor, slug: string, archived: boolean): Promise<CampaignView> {
+  const access = await campaignFor(actor, slug, 'archive')
+  const row = await setArchived(campaigns(access), { actor, campaignId: access.campaign.id, id: access.campaign.id }, archived)
+  return campaignView(row, access)
+}
+
+const campaigns = (access: CampaignAccess): EditableKind<CampaignRow> =>
+  ({ kind: 'campaign', read: findCampaignById, update: updateWithSlug(access.campaign.slug), view: row => campaignView(row, access) })
+
+/** Under a new slug the old one goes on leading to the campaign. */
+const updateWithSlug = (from: string): EditableKind<CampaignRow>['update'] => async (db: Queryable, to) => {
+  if (!await updateCampaign(db, to)) return false
+  const { slug } = to.change
+  if (slug === undefined || slug === from) return true
+  if (await isFormerSlugOfAnother(db, { slug, campaignId: to.id })) throw slugTaken(slug)
+  await keepFormerSlug(db, { campaignId: to.id, from, to: slug })
+  return true
+}
+
+const formOf = ({ slug, title, kind, startsOn, endsOn, description, visibility, selfReview }: CampaignRow) =>
+  ({ slug, title, kind, startsOn, endsOn, description, visibility, selfReview })

@@ -1,13 +1,9 @@
-/** "Hollow Ridge, winter" -> "hollow-ridge-winter"; empty when nothing of the text can stand in an address. */
-export const slugOf = (text: string): string =>
-  text.normalize('NFKD').replace(/[\u0300-\u036f]/g, '').toLowerCase()
-    .replace(/[^a-z0-9]+/g, '-').replace(/^-+|-+$/g, '').slice(0, 60).replace(/-+$/, '')
+import { DomainError } from '#shared/utils/domain-error'
 
-/** The first of `base`, `base-2`, `base-3`, ... that is free. */
-export function freeSlug(base: string, taken: readonly string[]): string {
-  const used = new Set(taken)
-  for (let n = 1; ; n++) {
-    const slug = n === 1 ? base : `${base}-${n}`
-    if (!used.has(slug)) return slug
-  }
-}
+export { freeSlug, slugOf } from '#shared/utils/slug'
+
+/** The slugs that `freeSlug` may come to. */
+export const slugCandidates = (base: string): string[] => [base, ...Array.from({ length: 50 }, (_, index) => `${base}-${index + 2}`)]
+
+export const slugTaken = (slug: string): DomainError =>
+  new DomainError('conflict', `The address ${slug} is taken. Choose another one.`, [{ path: 'slug', message: 'This address is taken.' }])

@@ -1,18 +1,14 @@
 import type { InstrumentCreate, InstrumentView } from '#shared/schemas/instrument'
 import { pageOf, type PageQuery } from '#shared/schemas/paging'
 import type { Page } from '#shared/types/retrieval'
-import { DomainError } from '#shared/utils/domain-error'
-import { countInstruments, findInstruments, findStationBySlug, insertInstrument, type InstrumentRow } from '../../database/campaigns/repository-equipment'
+import { countInstruments, findInstrumentBySlug, findInstruments, insertInstrument, type InstrumentRow } from '../../database/campaigns/repository-equipment'
 import { database } from '../../database/client'
-import { isDuplicateEntry } from '../../database/duplicate'
 import { newId } from '../../database/ids'
-import { writeLogbook } from '../../database/logbook/repository'
 import type { Actor } from '../accounts/actor'
 import { campaignFor } from '../campaigns/access'
-import { slugOf } from '../campaigns/slug'
-
-const instrumentView = ({ campaignId: _, stationId: __, createdAt, ...instrument }: InstrumentRow, station: string | null): InstrumentView =>
-  ({ ...instrument, station, createdAt: createdAt.toISOString() })
+import { slugFor, storeNew } from '../campaigns/store-new'
+import { stationIdOf } from './station-of'
+import { instrumentView } from './view'
 
 export async function listInstruments(actor: Actor, slug: string, query: PageQuery): Promise<Page<InstrumentView>> {
   const { campaign } = await campaignFor(actor, slug, 'see')
@@ -27,23 +23,9 @@ export async function listInstruments(actor: Actor, slug: string, query: PageQue
 export async function createInstrument(actor: Actor, slug: string, { slug: wanted, station, ...input }: InstrumentCreate): Promise<InstrumentView> {
   const { campaign } = await campaignFor(actor, slug, 'edit-equipment')
   const stationId = await stationIdOf(campaign.id, station)
-  const row: InstrumentRow = { id: newId(), campaignId: campaign.id, stationId, slug: wanted ?? (slugOf(input.name) || 'instrument'), ...input, createdAt: new Date(), version: 1 }
-  try {
-    await database().transaction(async (tx) => {
-      await insertInstrument(tx, row)
-      await writeLogbook(tx, { campaignId: campaign.id, objectKind: 'instrument', objectId: row.id, actorId: actor.userId, action: 'create', detail: { ...input, slug: row.slug, station } })
-    })
-  }
-  catch (error) {
-    if (isDuplicateEntry(error)) throw new DomainError('conflict', `This campaign has an instrument ${row.slug} already.`, [{ path: 'slug', message: 'This address is taken.' }])
-    throw error
-  }
+  const isTaken = async (candidate: string) => await findInstrumentBySlug(database(), campaign.id, candidate) !== undefined
+  const address = wanted ?? await slugFor(input.name, 'instrument', isTaken)
+  const row: InstrumentRow = { id: newId(), campaignId: campaign.id, stationId, slug: address, ...input, archivedAt: null, createdAt: new Date(), version: 1 }
+  await storeNew(actor, 'instrument', row, { ...input, slug: row.slug, station }, tx => insertInstrument(tx, row))
   return instrumentView(row, station)
-}
-
-async function stationIdOf(campaignId: string, slug: string | null): Promise<string | null> {
-  if (slug === null) return null
-  const station = await findStationBySlug(database(), campaignId, slug)
-  if (!station) throw new DomainError('validation_failed', `This campaign has no station ${slug}.`, [{ path: 'station', message: 'No such station in this campaign.' }])
-  return station.id
 }

@@ -12,13 +12,14 @@ import { refuseLastLead } from './last-lead'
 import { tellMember } from './tell'
 import { memberView } from './view'
 
+/** Who reads a campaign without belonging to it sees names and roles; e-mail addresses are for members. */
 export async function listMembers(actor: Actor, slug: string, query: PageQuery): Promise<Page<MemberView>> {
-  const { campaign } = await campaignFor(actor, slug, 'see')
+  const { campaign, member } = await campaignFor(actor, slug, 'see')
   const [rows, total] = await Promise.all([
     findMembers(database(), campaign.id, { after: query.cursor ?? null, limit: query.limit + 1 }),
     countMembers(database(), campaign.id),
   ])
-  return pageOf(rows, { limit: query.limit, total, id: row => row.userId, view: memberView })
+  return pageOf(rows, { limit: query.limit, total, id: row => row.userId, view: row => member ? memberView(row) : { ...memberView(row), email: '' } })
 }
 
 export async function changeRole(actor: Actor, slug: string, userId: string, { role, version }: { role: CampaignRole, version: number }): Promise<MemberView> {

@@ -1,23 +1,12 @@
 import { pageOf, type PageQuery } from '#shared/schemas/paging'
-import { parseRecipeAddress, type RecipeView } from '#shared/schemas/recipe'
+import { parseRecipeAddress, recipeAddressSchema, type RecipeView } from '#shared/schemas/recipe'
 import type { Page } from '#shared/types/retrieval'
 import { DomainError } from '#shared/utils/domain-error'
 import { countRecipes, findRecipe, findRecipes, newestRecipeVersions, type RecipeRow } from '../../database/campaigns/repository-recipes'
 import { database } from '../../database/client'
 import type { Actor } from '../accounts/actor'
 import { campaignFor } from '../campaigns/access'
-
-export const recipeView = (row: RecipeRow, createdBy: string, newest: boolean): RecipeView => ({
-  id: row.id,
-  address: `${row.slug}@${row.version}`,
-  slug: row.slug,
-  version: row.version,
-  name: row.name,
-  settings: row.settings,
-  createdBy,
-  createdAt: row.createdAt.toISOString(),
-  newest,
-})
+import { recipeView } from './view'
 
 export async function listRecipes(actor: Actor, slug: string, query: PageQuery): Promise<Page<RecipeView>> {
   const { campaign } = await campaignFor(actor, slug, 'see')
@@ -35,9 +24,15 @@ export async function listRecipes(actor: Actor, slug: string, query: PageQuery):
   })
 }
 
-/** `slug@version`, or `slug` for the newest one, of a campaign that the caller has been let into. */
+/** `slug@version`, or `slug` for the newest one, for a submission to a campaign that the caller has been let into. */
 export async function recipeByAddress(campaignId: string, address: string): Promise<RecipeRow> {
-  const row = await findRecipe(database(), campaignId, parseRecipeAddress(address))
+  const known = recipeAddressSchema.safeParse(address)
+  const row = known.success ? await findRecipe(database(), campaignId, parseRecipeAddress(known.data)) : undefined
   if (!row) throw new DomainError('validation_failed', `This campaign has no recipe ${address}.`, [{ path: 'recipe', message: 'No such recipe in this campaign.' }])
+  refuseArchivedRecipe(row)
   return row
+}
+
+export function refuseArchivedRecipe({ name, archivedAt }: Pick<RecipeRow, 'name' | 'archivedAt'>): void {
+  if (archivedAt) throw new DomainError('archived', `The recipe "${name}" is archived. Choose another one, or ask an analyst or the lead to bring it back.`, [{ path: 'recipe', message: 'This recipe is archived.' }])
 }

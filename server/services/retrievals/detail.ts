@@ -36,11 +36,12 @@ export async function retrievalDetail(actor: Actor, id: string): Promise<Retriev
 
 /** What both the role and the phase allow, with this sign-in or token. */
 function mayNow(actor: Actor, access: RetrievalAccess): RetrievalDetail['may'] {
-  const { retrieval, role } = access
+  const { retrieval, role, campaign } = access
   const { phase } = retrieval
-  const canChange = actor.scope === 'submit'
+  const canAbort = actor.scope === 'submit'
+  const canChange = canAbort && campaign.archivedAt === null
   return {
-    abort: canChange && !isFinal(phase) && mayChange('abort', actor, role, retrieval),
+    abort: canAbort && !isFinal(phase) && mayChange('abort', actor, role, retrieval),
     revise: canChange && isFinal(phase) && mayChange('revise', actor, role, retrieval),
     review: canChange && phase === 'COMPLETED' && mayReview(actor, access),
     submit: canChange && (phase === 'PENDING' || phase === 'HELD') && maySubmit(actor, role, retrieval),

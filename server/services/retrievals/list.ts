@@ -1,8 +1,9 @@
 import type { SQL } from 'drizzle-orm'
 import type { RetrievalFilter, RetrievalListQuery } from '#shared/schemas/retrieval-list'
 import type { Page, RetrievalRow } from '#shared/types/retrieval'
+import { findCampaignIdsBySlugs } from '../../database/campaigns/access-queries'
 import { database } from '../../database/client'
-import { countRetrievals, filterCondition, idsOfCampaigns, readRetrievalPage } from '../../database/retrievals/list'
+import { countRetrievals, filterCondition, readRetrievalPage } from '../../database/retrievals/list'
 import type { Actor } from '../accounts/actor'
 import { visibleCampaignIds } from '../campaigns/access'
 import { cursorAfter, keysetOf } from './cursor'
@@ -11,7 +12,7 @@ import { rowView } from './view'
 /** The caller's filter inside the campaigns that the caller may see. A campaign that is not theirs simply holds nothing. */
 export async function visibleCondition(actor: Actor, filter: RetrievalFilter): Promise<SQL | undefined> {
   const visible = await visibleCampaignIds(actor)
-  const wanted = filter.campaign.length > 0 ? await idsOfCampaigns(database(), filter.campaign) : visible
+  const wanted = filter.campaign.length > 0 ? await findCampaignIdsBySlugs(database(), filter.campaign) : visible
   return filterCondition(visible.filter(id => wanted.includes(id)), filter)
 }
 

@@ -9,16 +9,18 @@ import type { RetrievalRecord } from '../../database/retrievals/claim'
 import { insertEvents } from '../../database/retrievals/events'
 import { enqueueRetrieval } from '../../jobs/queue'
 import type { Actor } from '../accounts/actor'
+import { refuseArchivedCampaign } from '../campaigns/access'
 import { getLineList } from '../line-lists/index'
-import { checkSettings } from '../recipes/check-settings'
+import { checkSettings } from '#shared/utils/check-settings'
 import { mayChange, refuseUnless, retrievalFor } from './access'
 import { contentHash } from './hash'
 import { mergeSettings } from './settings'
 
 /** Queues the next revision under changed settings; the old result stays and is shown until the new one is there. */
 export async function reviseRetrieval(actor: Actor, id: string, { settings: patch, note }: ReviseRetrieval): Promise<{ id: string, revision: number }> {
-  const { retrieval, role } = await retrievalFor(actor, id)
+  const { retrieval, role, campaign } = await retrievalFor(actor, id)
   refuseUnless(mayChange('revise', actor, role, retrieval), 'You may revise your own retrievals; those of others are revised by an analyst or the lead.')
+  refuseArchivedCampaign(campaign)
   const settings = mergeSettings(retrieval.settings, patch)
   await refuseUnusable(retrieval, settings)
   const revision = retrieval.revision + 1

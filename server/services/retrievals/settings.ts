@@ -2,7 +2,7 @@ import type * as z from 'zod'
 import type { SettingsPatch } from '#shared/schemas/retrieval-submit'
 import { settingsSchema, type RetrievalSettings } from '#shared/schemas/settings'
 import { DomainError } from '#shared/utils/domain-error'
-import { unavailableMethod } from '../recipes/check-settings'
+import { unavailableMethod } from '#shared/utils/check-settings'
 
 /** What is said wins over what it is laid upon; what neither says has its default. */
 export function mergeSettings(base: RetrievalSettings | undefined, patch: SettingsPatch | undefined): RetrievalSettings {

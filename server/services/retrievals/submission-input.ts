@@ -6,11 +6,12 @@ import type { SpectrumProblem } from '#shared/types/spectrum'
 import { DomainError } from '#shared/utils/domain-error'
 import { prepareFromTable } from '#shared/utils/retrieval/from-table'
 import { config } from '../../config'
-import { findInstrumentId, findStationId } from '../../database/retrievals/places'
 import { database } from '../../database/client'
 import { findSpectraForSubmission } from '../../database/retrievals/read'
-import { checkSettings } from '../recipes/check-settings'
+import { checkSettings } from '#shared/utils/check-settings'
 import { getLineList } from '../line-lists/index'
+import { placeOf } from '../spectra/place'
+import { refuseArchivedPlaces } from './refuse-archived'
 
 /** One thing to retrieve a temperature from, and what a row says of it. */
 export interface SubmittedInput {
@@ -42,11 +43,9 @@ async function tableInput(campaignId: string, table: LineTable, settings: Retrie
   if (listId && !lineList) throw new DomainError('unknown_line_list', `There is no line list ${listId}.`, [{ path: 'lineTable.lineList', message: 'No such line list.' }])
   const prepared = prepareFromTable({ table, settings, lineList })
   if ('problem' in prepared) refuse(prepared.problem.map(problem => ({ ...problem, path: `lineTable.${problem.path}` })))
-  const place = { stationId: table.station ? await findStationId(database(), campaignId, table.station) : null, instrumentId: table.instrument ? await findInstrumentId(database(), campaignId, table.instrument) : null }
-  if (table.station && !place.stationId) refuse([{ path: 'lineTable.station', message: `This campaign has no station ${table.station}.` }])
-  if (table.instrument && !place.instrumentId) refuse([{ path: 'lineTable.instrument', message: `This campaign has no instrument ${table.instrument}.` }])
+  const { stationId, instrument } = await placeOf(campaignId, table, { within: 'lineTable' })
   return {
-    ...place, name: table.name ?? 'Line table', spectrumId: null, lineTable: table, missing: [], problem: null,
+    stationId, instrumentId: instrument?.id ?? null, name: table.name ?? 'Line table', spectrumId: null, lineTable: table, missing: [], problem: null,
     observedAt: table.observedAt ? new Date(table.observedAt) : null, band: table.band ?? bandOf(settings),
   }
 }
@@ -54,6 +53,7 @@ async function tableInput(campaignId: string, table: LineTable, settings: Retrie
 async function spectrumInputs(campaignId: string, ids: string[], settings: RetrievalSettings): Promise<SubmittedInput[]> {
   const found = new Map((await findSpectraForSubmission(database(), campaignId, ids)).map(row => [row.id, row]))
   refuse(ids.flatMap((id, index) => found.has(id) ? [] : [{ path: `spectrumIds.${index}`, message: 'This campaign has no such spectrum.' }]))
+  await refuseArchivedPlaces(ids.flatMap(id => found.get(id) ?? []), index => `spectrumIds.${index}`)
   return ids.flatMap((id) => {
     const row = found.get(id)
     return row ? [{ ...row, spectrumId: id, lineTable: null, band: bandOf(settings) }] : []

@@ -8,12 +8,14 @@ import type { SpectrumRow } from '../../database/spectra/repository'
 import { enqueueRetrieval } from '../../jobs/queue'
 import type { Actor } from '../accounts/actor'
 import { maySubmit, refuseUnless, retrievalFor } from './access'
+import { refuseArchivedDraft } from './refuse-archived'
 import { missingWords } from './submit'
 
 /** Queues a draft, or one that waited for its owner to say what the file did not. */
 export async function submitDraft(actor: Actor, id: string): Promise<{ id: string, revision: number }> {
-  const { retrieval, role } = await retrievalFor(actor, id)
+  const { retrieval, role, campaign } = await retrievalFor(actor, id)
   refuseUnless(maySubmit(actor, role, retrieval), 'You may submit your own drafts; those of others are submitted by an analyst or the lead.')
+  await refuseArchivedDraft(campaign, retrieval)
   const spectrum = retrieval.spectrumId ? await findSpectrum(database(), retrieval.spectrumId) : undefined
   if (spectrum?.problem) throw new DomainError('unreadable_spectrum', `Replace the file first. ${spectrum.problem.message}`)
   if (spectrum && spectrum.missing.length > 0) {

@@ -46,7 +46,7 @@ export async function spectrumBytes(actor: Actor, id: string): Promise<{ name: s
 export async function amendSpectrum(actor: Actor, id: string, { version, about: said }: SpectrumPatch): Promise<SpectrumView> {
   const access = await spectrumToChange(actor, { id, version })
   const { spectrum } = access
-  const place = await placeOf(spectrum.campaignId, said)
+  const place = await placeOf(spectrum.campaignId, said, { keeps: spectrum })
   const about = { ...spectrum.about, ...said }
   const bytes = await storage().read(spectrum.campaignId, spectrum.sha256)
   const description = await describeBytes(bytes, spectrum.name, { about, fallback: fallbackOf(place.instrument) })

@@ -22,7 +22,7 @@ export async function replaceSpectrumBytes(actor: Actor, target: Target, file: U
   const access = await spectrumToChange(actor, target)
   const { spectrum } = access
   refuseReadable(spectrum)
-  const place = await placeOf(spectrum.campaignId, said)
+  const place = await placeOf(spectrum.campaignId, said, { keeps: spectrum })
   const bytes = await readFile(file.path)
   const about = { ...spectrum.about, ...said }
   const description = await describeBytes(bytes, file.name, { about, fallback: fallbackOf(place.instrument) })

@@ -1,17 +1,13 @@
 import { pageOf, type PageQuery } from '#shared/schemas/paging'
 import type { StationCreate, StationView } from '#shared/schemas/station'
 import type { Page } from '#shared/types/retrieval'
-import { DomainError } from '#shared/utils/domain-error'
-import { countStations, findStations, insertStation, type StationRow } from '../../database/campaigns/repository-equipment'
+import { countStations, findStationBySlug, findStations, insertStation, type StationRow } from '../../database/campaigns/repository-equipment'
 import { database } from '../../database/client'
-import { isDuplicateEntry } from '../../database/duplicate'
 import { newId } from '../../database/ids'
-import { writeLogbook } from '../../database/logbook/repository'
 import type { Actor } from '../accounts/actor'
 import { campaignFor } from '../campaigns/access'
-import { slugOf } from '../campaigns/slug'
-
-const stationView = ({ campaignId: _, createdAt, ...station }: StationRow): StationView => ({ ...station, createdAt: createdAt.toISOString() })
+import { slugFor, storeNew } from '../campaigns/store-new'
+import { stationView } from './view'
 
 export async function listStations(actor: Actor, slug: string, query: PageQuery): Promise<Page<StationView>> {
   const { campaign } = await campaignFor(actor, slug, 'see')
@@ -25,16 +21,9 @@ export async function listStations(actor: Actor, slug: string, query: PageQuery)
 
 export async function createStation(actor: Actor, slug: string, { slug: wanted, ...input }: StationCreate): Promise<StationView> {
   const { campaign } = await campaignFor(actor, slug, 'edit-equipment')
-  const row: StationRow = { id: newId(), campaignId: campaign.id, slug: wanted ?? (slugOf(input.name) || 'station'), ...input, createdAt: new Date(), version: 1 }
-  try {
-    await database().transaction(async (tx) => {
-      await insertStation(tx, row)
-      await writeLogbook(tx, { campaignId: campaign.id, objectKind: 'station', objectId: row.id, actorId: actor.userId, action: 'create', detail: { slug: row.slug, name: row.name } })
-    })
-  }
-  catch (error) {
-    if (isDuplicateEntry(error)) throw new DomainError('conflict', `This campaign has a station ${row.slug} already.`, [{ path: 'slug', message: 'This address is taken.' }])
-    throw error
-  }
+  const isTaken = async (candidate: string) => await findStationBySlug(database(), campaign.id, candidate) !== undefined
+  const address = wanted ?? await slugFor(input.name, 'station', isTaken)
+  const row: StationRow = { id: newId(), campaignId: campaign.id, slug: address, ...input, archivedAt: null, createdAt: new Date(), version: 1 }
+  await storeNew(actor, 'station', row, { ...input, slug: row.slug }, tx => insertStation(tx, row))
   return stationView(row)
 }

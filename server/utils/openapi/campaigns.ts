@@ -23,7 +23,7 @@ const creationOf = (name: string, who: CampaignAction, summary: string, body: z.
 
 export const campaignRoutes: ApiRoute[] = [
   {
-    method: 'get', path: '/api/campaigns', area: 'campaigns', access: 'read', who: 'account', summary: 'The campaigns that the caller is a member of.',
+    method: 'get', path: '/api/campaigns', area: 'campaigns', access: 'read', who: 'account', summary: 'The campaigns that the caller may see: as member, or because every account may.',
     query: pageQuerySchema,
     answers: { 200: { description: 'A page.', schema: pageSchema(campaignViewSchema) } },
   },
@@ -38,7 +38,7 @@ export const campaignRoutes: ApiRoute[] = [
     answers: { 200: { description: 'The campaign.', schema: campaignViewSchema } },
   },
   {
-    method: 'patch', path: base, area: 'campaigns', access: 'submit', who: 'edit-campaign', summary: 'Change a campaign (lead).', params: campaignParams, body: campaignPatchSchema,
+    method: 'patch', path: base, area: 'campaigns', access: 'submit', who: 'edit-campaign', summary: 'Change a campaign (lead). A former slug goes on leading to it.', params: campaignParams, body: campaignPatchSchema,
     answers: { 200: { description: 'The campaign as it stands now.', schema: campaignViewSchema } },
     errors: [409],
   },

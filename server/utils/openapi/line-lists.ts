@@ -16,7 +16,7 @@ export const lineListRoutes: ApiRoute[] = [
 
 export const logbookRoutes: ApiRoute[] = [
   {
-    method: 'get', path: '/api/logbook', area: 'logbook', access: 'read', who: 'account', summary: 'Who did what when with one thing, oldest first.', query: logbookQuerySchema,
+    method: 'get', path: '/api/logbook', area: 'logbook', access: 'read', who: 'account', summary: 'Who did what when: with one thing (oldest first), or in a campaign (newest first).', query: logbookQuerySchema,
     answers: { 200: { description: 'A page.', schema: pageSchema(logbookViewSchema) } },
     errors: [404],
   },

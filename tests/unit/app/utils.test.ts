@@ -11,7 +11,7 @@ import { emptyView, exportAddress, fromRoute, toQuery, toRoute } from '~/utils/r
 import { safePath } from '~/utils/safe-path'
 import { seriesSummary, stationSeries } from '~/utils/series'
 import { placeOn, temperatureScale } from '~/utils/temperature-scale'
-import { nightOf } from '~/utils/time-text'
+import { nightOf } from '#shared/utils/solar-time'
 
 const row = (change: Partial<RetrievalRow>): RetrievalRow => ({
   id: 'r', name: 'night', campaign: { slug: 'ridge', title: 'Ridge' }, batchId: 'b', owner: 'A', station: 'ridge', instrument: null, recipe: null, band: '3-1',
@@ -73,7 +73,7 @@ describe('nights', () => {
     expect(nightOf('2026-01-15T08:00:00.000Z', -120)).toBe('2026-01-14')
   })
   it('without anything stay in the strip as gaps', () => {
-    const [ridge] = nightStrip([row({}), row({ observedAt: '2026-01-16T21:00:00.000Z', phase: 'ERROR' })], [{ slug: 'ridge', longitude: 0 }])
+    const [ridge] = nightStrip([row({}), row({ observedAt: '2026-01-16T21:00:00.000Z', phase: 'ERROR' })], [{ name: 'ridge', longitude: 0 }])
     expect(ridge!.nights.map(cell => [cell.night, cell.completed, cell.failed])).toEqual([['2026-01-14', 1, 0], ['2026-01-15', 0, 0], ['2026-01-16', 0, 1]])
   })
 })
