@@ -67,7 +67,7 @@ describe('a change of role', () => {
 
 describe('a removal', () => {
   it('ends the sight of the campaign at once, keeps what was submitted, and is told by mail', async () => {
-    const spectrum = await at.observer.call<{ items: { id: string }[] }>('POST', `${base}/spectra`, { name: 'kept', axis: [1514, 1515, 1516], values: [1, 2, 1], about: { axisUnit: 'nm', medium: 'vacuum', valueKind: 'photons' } })
+    const spectrum = await at.observer.call<{ items: { id: string }[] }>('POST', `${base}/spectra`, { name: 'kept', axis: [1514, 1515, 1516], values: [1, 2, 1], axisUnit: 'nm', medium: 'vacuum', valueKind: 'photons' })
     expect((await remove(at.lead, at.observer)).status).toBe(204)
     expect((await at.observer.call('GET', base)).status).toBe(404)
     expect(await member(at.observer)).toBeUndefined()
