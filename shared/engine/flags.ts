@@ -38,4 +38,5 @@ export const flagWords: Record<FlagName, string> = {
   'strength-sets-disagree': 'strength sets differ by more than the noise',
   'shift-large': 'the lines stand more than half a width from their list places',
   'response-stale': 'the response curve had expired when the spectrum was taken',
+  'two-temperatures': 'two temperatures fit the lines better than one, beyond what noise explains',
 }

@@ -25,7 +25,8 @@ export interface PrintedTemperature {
  * A temperature and its uncertainties, K, all with the decimals of the noise (or of the systematic part where there is no noise).
  * `decimals` overrides, for a bound that stands beside another number.
  *
- * @example printTemperature({ value: 187.43, uNoise: 1.27 }).text // "187.4 K ± 1.3"
+ * @example
+ * printTemperature({ value: 187.43, uNoise: 1.27 }).text // => '187.4 K ± 1.3'
  */
 export function printTemperature(
   { value, uNoise = null, uSystematic = null }: { value: number, uNoise?: number | null, uSystematic?: number | null },

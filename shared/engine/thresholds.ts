@@ -34,3 +34,7 @@ export const uncorrectedTau = 0.3
 export const truncatedPartition = 0.01
 /** Up to this many used lines each is left out by a full fit; above, by one linearised step. */
 export const leaveOneOutExactLines = 64
+/** Two temperatures are tried with at least this many used lines. */
+export const twoTemperatureLines = 6
+/** `two-temperatures`: the improvement is this unlikely, or less, when there is one temperature. */
+export const twoTemperatureProbability = 0.01

@@ -79,6 +79,14 @@ export interface AlternativeStrengths {
   einsteinA: (number[] | null)[]
 }
 
+/** Settings of estimator 4. */
+export interface TwoTemperatureSettings {
+  /** Simulated data sets of the bootstrap. */
+  draws: number
+  /** Of their random numbers, 0 .. 2^53 - 1; stored with the result. */
+  seed: number
+}
+
 /** Input of `retrieveFromLines`. */
 export interface LineRetrievalInput {
   reading: ObservableReading
@@ -92,6 +100,8 @@ export interface LineRetrievalInput {
   bandScales?: 'own' | 'common'
   strengthSet: string | null
   alternatives?: AlternativeStrengths[]
+  /** Given: two temperatures are looked for as well. */
+  twoTemperatures?: TwoTemperatureSettings
   /** Flags that were raised before the lines were measured (blend, saturated, shift-large, ...). */
   priorFlags?: FlagName[]
   cautions?: string[]
@@ -100,7 +110,7 @@ export interface LineRetrievalInput {
 export const flagNames = [
   'few-lines', 'no-test', 'short-lever', 'weak-line', 'poor-fit', 'curved', 'tau-uncorrected', 'blend', 'saturated',
   'edge-of-range', 'open-interval', 'not-converged', 'sigma-assumed', 'line-rejected', 'q-extrapolated', 'q-truncated',
-  'strength-sets-disagree', 'shift-large', 'response-stale',
+  'strength-sets-disagree', 'shift-large', 'response-stale', 'two-temperatures',
 ] as const
 /** Stored as bits: bit i is flagNames[i]; the order is part of the database and only ever grows at the end. */
 export type FlagName = (typeof flagNames)[number]
@@ -160,6 +170,39 @@ export interface CrossCheck {
 /** The straight line of the Boltzmann plot: ln(I/w) = intercept_band - beta C2 E. */
 export interface PlotLine { band: string, intercept: number, slope: number, energyRange: [number, number] }
 
+/** One of two gases. */
+export interface TwoTemperatureGas {
+  /** As `TemperatureValue`; `uNoise` null where the lines do not determine it or it stands at an end of the search range. */
+  temperature: { value: number, uNoise: number | null, interval68: Interval, interval95: Interval, unit: 'K' }
+  scales: { band: string, value: number, uNoise: number | null }[]
+  /** Its part of the modelled intensity of the used lines, 0 .. 1. */
+  share: number
+  plotLines: PlotLine[]
+}
+
+/** Two temperatures beside the one of the result; which of the two fits is right is not decided here. */
+export interface TwoTemperatureResult {
+  /** The cold and the hot one; null when there are none to show, and `reason` says why. */
+  gases: [cold: TwoTemperatureGas, hot: TwoTemperatureGas] | null
+  reason?: string
+  chi2: number | null
+  dof: number
+  /** p value of chi2. */
+  pValue: number | null
+  /** chi2 with one temperature minus chi2 with two (`difference`), or that over chi2 with two (`ratio`: noise known up to a factor). */
+  improvement: number | null
+  statistic: 'difference' | 'ratio'
+  /** How often data of one temperature improve as much (parametric bootstrap). */
+  probability: number | null
+  draws: number
+  seed: number
+  aicc: { one: number, two: number } | null
+  /** Is the improvement more than chance explains (`twoTemperatureProbability`)? */
+  preferred: boolean
+  /** Modelled intensity of each used line. */
+  model: number[] | null
+}
+
 /** What a retrieval gives back. `temperature` null: failed, and `reason` says why in words. No NaN anywhere. */
 export interface RetrievalResult {
   temperature: TemperatureValue | null
@@ -189,6 +232,8 @@ export interface RetrievalResult {
   cautions: string[]
   strengthSets: { name: string, temperature: number | null, uNoise: number | null, comparisonOnly?: boolean }[]
   components: UncertaintyComponent[]
+  /** Present when two temperatures were asked for and one was found. */
+  twoTemperatures?: TwoTemperatureResult
   /** Present when the lines were measured in a spectrum. */
   spectrum?: SpectrumMeasurementSummary
 }
@@ -235,6 +280,8 @@ export interface SpectrumRetrievalInput {
   bandScales?: 'own' | 'common'
   strengthSet: string | null
   alternatives?: AlternativeStrengths[]
+  /** Given: two temperatures are looked for as well. */
+  twoTemperatures?: TwoTemperatureSettings
   cautions?: string[]
 }
 

@@ -31,10 +31,8 @@ export function qrFactor(a: ArrayLike<number>, rows: number, columns: number): Q
 
 /** Makes column k zero below the diagonal; false when the column lies in the span of its predecessors. */
 function reflectColumn(packed: Float64Array, rows: number, columns: number, k: number, heads: Float64Array, factors: Float64Array, tolerance: number): boolean {
-  let above = 0
-  let below = 0
-  for (let i = 0; i < k; i++) above = Math.hypot(above, packed[i * columns + k])
-  for (let i = k; i < rows; i++) below = Math.hypot(below, packed[i * columns + k])
+  const above = columnLength(packed, columns, k, 0, k)
+  const below = columnLength(packed, columns, k, k, rows)
   if (below === 0) return false
   const diagonal = packed[k * columns + k]
   const r = diagonal > 0 ? -below : below
@@ -50,6 +48,16 @@ function reflectColumn(packed: Float64Array, rows: number, columns: number, k: n
     for (let i = k + 1; i < rows; i++) packed[i * columns + j] -= dot * packed[i * columns + k]
   }
   return below > tolerance * Math.hypot(above, below)
+}
+
+/** Length of rows from .. to-1 of column k; scaled only where squares would leave the range of doubles, since that is slow. */
+function columnLength(packed: Float64Array, columns: number, k: number, from: number, to: number): number {
+  let square = 0
+  for (let i = from * columns + k; i < to * columns; i += columns) square += packed[i] * packed[i]
+  if (square > 1e-280 && square < 1e280) return Math.sqrt(square)
+  let length = 0
+  for (let i = from * columns + k; i < to * columns; i += columns) length = Math.hypot(length, packed[i])
+  return length
 }
 
 /**

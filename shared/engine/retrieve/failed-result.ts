@@ -11,7 +11,7 @@ export function failedResult(input: LineRetrievalInput, selection: LineSelection
   return {
     temperature: null,
     reason,
-    method: 'envelope',
+    method: input.twoTemperatures ? 'two-temperature' : 'envelope',
     strengthSet: input.strengthSet,
     scales: [],
     chi2: finiteOrNull(input.noise === 'from-residuals' ? null : fitted?.fit.chi2),

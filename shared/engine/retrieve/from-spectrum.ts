@@ -61,6 +61,7 @@ function lineInput(input: SpectrumRetrievalInput, measurement: Measurement): Lin
     bandScales: input.bandScales,
     strengthSet: input.strengthSet,
     alternatives: reorder(input.alternatives, input.lines, lines),
+    twoTemperatures: input.twoTemperatures,
     priorFlags: measurement.set.flags,
     cautions: input.cautions,
   }

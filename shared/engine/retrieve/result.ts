@@ -19,7 +19,7 @@ export function resultOf(input: LineRetrievalInput, selection: LineSelection, fi
   const temperature = { ...noise, uSystematic: Math.hypot(...diagnosis.components.map(component => component.kelvin)) }
   const result: Omit<RetrievalResult, 'flags'> = {
     temperature,
-    method: 'envelope',
+    method: input.twoTemperatures ? 'two-temperature' : 'envelope',
     strengthSet: input.strengthSet,
     scales: scalesOf(fitted),
     chi2: input.noise === 'from-residuals' ? null : fit.chi2,
