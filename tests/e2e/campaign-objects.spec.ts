@@ -120,7 +120,7 @@ test('a campaign moves to another address, is opened to every account and archiv
   await expect(visitor.getByRole('link', { name: 'Hill' })).toBeVisible()
   await expect(visitor.getByRole('link', { name: 'Add a station' })).toHaveCount(0)
   expect((await visitor.goto(`${origin}/campaigns/${slug}-now/settings`))!.status()).toBe(403)
-  await expect(visitor.getByRole('heading', { level: 1 })).toHaveText('Your role does not allow this')
+  await expect(visitor.getByRole('heading', { level: 1 })).toHaveText('This page is not for your account')
   await visitor.context().close()
 
   await page.goto(`${origin}/campaigns/${slug}-now/settings`)

@@ -102,7 +102,7 @@ test('a line that is switched off moves the number at once, and can be saved as 
 test('a pasted line table is asked for its observable, previewed and queued', async ({ page }) => {
   await signIn(page)
   const { slug } = await post<{ slug: string }>(page.request, '/api/campaigns', { title: `Table ${Date.now()}`, kind: 'airglow' })
-  await page.goto(`${origin}/submit?campaign=${slug}`)
+  await page.goto(`${origin}/submit?campaign=${slug}`, { waitUntil: 'networkidle' })
   await page.getByRole('tab', { name: 'Line table' }).click()
   await page.getByLabel('Line table', { exact: true }).last().fill('label, intensity, sigma\nP1(2), 812.4, 8\nP1(3), 846.1, 8\nP1(4), 541.0, 8\nP1(5), 246.8, 8')
   await expect(page.getByText('Say what the intensities are.')).toBeVisible()
